@@ -1,0 +1,28 @@
+export {
+  EARTH,
+  circuitSchema,
+  conditionSchema,
+  faultModeSchema,
+  faultModes,
+  faultSchema,
+  hazardSchema,
+  partSchema,
+  placeSchema,
+  relayPositionSchema,
+  stringSchema,
+  terminalSchema,
+  type Circuit,
+  type Condition,
+  type Fault,
+  type FaultMode,
+  type LiftState,
+  type Part,
+  type PartKind,
+  type PartOf,
+  type Place,
+  type RelayPosition,
+  type StringLine,
+  type Terminal,
+} from './circuit';
+export type { CheckFinding } from './finding';
+export { completeState, contactClosed, isResting, liftStateKey, restingState } from './liftState';
