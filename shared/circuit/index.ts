@@ -26,3 +26,23 @@ export {
 } from './circuit';
 export type { CheckFinding } from './finding';
 export { completeState, contactClosed, isResting, liftStateKey, restingState } from './liftState';
+export { tagsOf } from './tags';
+export {
+  PART_KINDS,
+  modesOf,
+  proofsOf,
+  type ModeBehaviour,
+  type PartKindBehaviour,
+  type Proof,
+} from './partKinds';
+export { RESISTIVE_OHMS, faultKey, singleFaults, type WeightedFault } from './faults';
+export { travelOf, type Travel } from './travel';
+export {
+  CONTROLLER,
+  finestSections,
+  sectionsOf,
+  stringSteps,
+  stringTags,
+  type Section,
+  type StringStep,
+} from './sections';

@@ -1,4 +1,5 @@
-import { EARTH, type Circuit, type Part } from '../circuit/circuit';
+import { EARTH, type Circuit } from '../circuit/circuit';
+import { tagsOf } from '../circuit/tags';
 
 /** Node number of earth, which is the reference and has no row of its own. */
 export const EARTH_NODE = -1;
@@ -24,11 +25,6 @@ export interface Topology {
   /** Edges between the neighbours of k, pair by pair, from `pairStart[k]` on. */
   readonly pairStart: Int32Array;
   readonly pairEdge: Int32Array;
-}
-
-/** Every tag that a part names, in the order in which its kind lists them. */
-export function tagsOf(part: Part): readonly string[] {
-  return part.kind === 'transformer' ? [...part.primary, ...part.secondary] : part.between;
 }
 
 const known = new WeakMap<Circuit, Topology>();

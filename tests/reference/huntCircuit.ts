@@ -58,7 +58,6 @@ const NO = 'no';
 export function huntCircuit(hunt: HuntCircuit): Circuit {
   const supply = hunt.parts.find(({ kind }) => kind === 'supply')!;
   const bridge = hunt.parts.find(({ kind }) => kind === 'bridge');
-  const [first, last] = stringEnds(hunt);
   const placeNames = new Set([
     ...hunt.terminals.flatMap(({ places }) => places),
     ...hunt.parts.map(({ place }) => place),
@@ -87,28 +86,32 @@ export function huntCircuit(hunt: HuntCircuit): Circuit {
       hazard: 'low',
     })),
     parts: hunt.parts.map(huntPart),
-    strings: [
-      {
-        name: 'safety string',
-        from: first,
-        to: last,
-        return: 'R',
-        supplyReturn: bridgeFirst ? bridge.between[3]! : supply.between[1]!,
-      },
-    ],
+    strings: stringEnds(hunt).map(([from, to], k) => ({
+      name: `safety string ${k + 1}`,
+      from,
+      to,
+      return: 'R',
+      supplyReturn: bridgeFirst ? bridge.between[3]! : supply.between[1]!,
+    })),
   };
 }
 
-/** From behind the fuse to the last coil's tag, or the bridge's where the bridge is last. */
-function stringEnds({ parts }: HuntCircuit): [string, string] {
+/** From behind the fuse to the last coil's tag, or the bridge's where the bridge is last; two if a relay feeds one. */
+function stringEnds({ parts }: HuntCircuit): readonly (readonly [string, string])[] {
   const fuse = parts.find(({ kind }) => kind === 'fuse')!;
   const coils = parts.filter(({ kind }) => kind === 'coil');
   const bridge = parts.find(({ kind }) => kind === 'bridge');
-  if (bridge && coils.length === 1) return [fuse.between[1]!, bridge.between[0]!];
+  if (bridge && coils.length === 1) return [[fuse.between[1]!, bridge.between[0]!]];
   const feedsBridge = bridge?.between.includes(fuse.between[1]!) ?? false;
   const from = feedsBridge ? bridge!.between[2]! : fuse.between[1]!;
-  const lock = coils.find(({ name }) => name === 'lock relay') ?? coils.at(-1)!;
-  return [from, lock.between[0]!];
+  const tagOf = (coil: string) => coils.find(({ name }) => name === coil)!.between[0]!;
+  const relayFed = parts.some(({ relay }) => relay !== undefined);
+  return relayFed
+    ? [
+        [from, tagOf('safety relay')],
+        [from, tagOf('lock relay')],
+      ]
+    : [[from, tagOf('lock relay')]];
 }
 
 function huntPart(part: HuntPart): Part {
