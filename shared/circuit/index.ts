@@ -46,3 +46,12 @@ export {
   type Section,
   type StringStep,
 } from './sections';
+export {
+  SPEC_TAGS,
+  buildStringCircuit,
+  type SpecCoil,
+  type SpecPart,
+  type StringSpec,
+  type StringStop,
+} from './stringCircuit';
+export { stringCircuit } from './stringNotation';

@@ -1,0 +1,36 @@
+import type { Circuit } from '../circuit/circuit';
+import type { CheckFinding } from '../circuit/finding';
+import { hertzOf } from './stamping';
+
+/**
+ * What the solver cannot do with a circuit, before it is asked to: errors make readings wrong.
+ * Capacitors beside a bridge count as open, since smoothing needs a periodic solution over charge.
+ */
+export function solvable(circuit: Circuit): readonly CheckFinding[] {
+  const findings: CheckFinding[] = [];
+  const rectified = circuit.parts.some(({ kind }) => kind === 'bridge');
+  if (!rectified) return findings;
+  circuit.parts.forEach((part, index) => {
+    if (part.kind !== 'capacitor') return;
+    findings.push({
+      code: 'solver.capacitor-with-bridge',
+      severity: 'error',
+      at: `parts.${index}`,
+      details: { part: part.name },
+    });
+  });
+  const frequencies = new Set(
+    circuit.parts.flatMap((part) =>
+      part.kind === 'supply' && part.current === 'alternating' ? [hertzOf(part)] : [],
+    ),
+  );
+  if (frequencies.size > 1) {
+    findings.push({
+      code: 'solver.several-frequencies-with-bridge',
+      severity: 'error',
+      at: 'parts',
+      details: { frequencies: frequencies.size },
+    });
+  }
+  return findings;
+}
