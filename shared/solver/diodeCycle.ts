@@ -81,13 +81,13 @@ class Newton {
   private linearise(junctions: Float64Array): void {
     const { kept, network, slopes, offsets, point } = this;
     network.load(kept.between, kept.leak);
-    kept.diodes.forEach(([anode, cathode], d) => {
+    for (let d = 0; d < kept.diodes.length; d++) {
       junction(kept.law, junctions[d]!, point);
       const stretch = 1 + point[1]! * kept.law.seriesOhms;
       slopes[d] = point[1]! / stretch;
       offsets[d] = (point[0]! - point[1]! * junctions[d]!) / stretch;
-      network.add(anode, cathode, slopes[d]!);
-    });
+      network.add(kept.diodes[d]![0], kept.diodes[d]![1], slopes[d]!);
+    }
     network.factor();
     for (let e = 0; e < this.extras.length; e++) {
       const answer = this.answers[e]!;

@@ -72,45 +72,25 @@ export function recover(e: Elimination, values: Float64Array): void {
   }
 }
 
-/** Voltages that 1 A into a node makes at all eliminated nodes, kept nodes held at 0 V; ohms. */
-export function impedanceColumn(e: Elimination, node: number): Float64Array {
-  const column = new Float64Array(e.topology.size);
-  if (node < 0 || node >= e.count) return column;
-  column[node] = 1;
-  passOn(e, column);
-  column.fill(0, e.count);
-  recover(e, column);
-  return column;
-}
-
 /**
- * The voltage at each eliminated node per ampere into the same node, kept nodes held at 0 V; ohms.
- * Works back from the last node; every term is positive (Takahashi's recurrence, 1973).
+ * Resistance between two eliminated nodes, kept nodes held at 0 V; -1 is earth; ohms. The ampere goes in
+ * at one and out at the other, so that what both share (where they float, nearly everything) never
+ * enters. `scratch` has a place for every node.
  */
-export function impedanceDiagonal(e: Elimination): Float64Array {
-  const { start, neighbour, toNeighbour, pairStart, pairEdge, edges, size } = e.topology;
-  const diagonal = new Float64Array(size);
-  const across = new Float64Array(edges);
-  const sums = new Float64Array(size);
-  for (let k = e.count - 1; k >= 0; k--) {
-    const from = start[k]!;
-    const to = start[k + 1]!;
-    let pair = pairStart[k]!;
-    for (let s = from; s < to; s++) {
-      sums[s - from] = (sums[s - from] ?? 0) + e.share[s]! * diagonal[neighbour[s]!]!;
-      for (let t = s + 1; t < to; t++) {
-        const z = across[pairEdge[pair++]!]!;
-        sums[s - from]! += e.share[t]! * z;
-        sums[t - from]! += e.share[s]! * z;
-      }
-    }
-    let own = e.inverse[k]!;
-    for (let s = from; s < to; s++) {
-      across[toNeighbour[s]!] = sums[s - from]!;
-      own += e.share[s]! * sums[s - from]!;
-      sums[s - from] = 0;
-    }
-    diagonal[k] = own;
-  }
-  return diagonal;
+export function resistanceBetween(
+  e: Elimination,
+  red: number,
+  black: number,
+  scratch: Float64Array,
+): number {
+  if (red === black) return 0;
+  const inner = (node: number) => node >= 0 && node < e.count;
+  scratch.fill(0);
+  if (inner(red)) scratch[red] = 1;
+  if (inner(black)) scratch[black] = -1;
+  passOn(e, scratch);
+  scratch.fill(0, e.count);
+  recover(e, scratch);
+  const ohms = (inner(red) ? scratch[red]! : 0) - (inner(black) ? scratch[black]! : 0);
+  return Math.max(0, ohms);
 }

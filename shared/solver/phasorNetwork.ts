@@ -43,7 +43,6 @@ const addAt = (v: Phasors, node: number, amps: number): void => {
 class Frequency {
   private readonly elimination: PhasorElimination;
   private readonly volts: Phasors;
-  private readonly columns = new Map<number, Phasors>();
   /** Transformers one after the other: each answer includes those before it. */
   private readonly transformers: { own: StampedTransformer; answer: Phasors; total: Complex }[] =
     [];
@@ -96,25 +95,17 @@ class Frequency {
     }
   }
 
-  private column(node: number): Phasors {
-    let column = this.columns.get(node);
-    if (!column) {
-      column = phasors(this.network.topology.size);
-      addAt(column, node, 1);
-      this.solve(column);
-      this.columns.set(node, column);
-    }
-    return column;
-  }
-
   open(pair: NodePair): Complex {
     return across(this.volts, pair);
   }
 
+  /** Ohms between the probes: one ampere in at red and out at black, so that what both share cancels. */
   impedance(pair: NodePair): Complex {
-    const red = across(this.column(pair.red), pair);
-    const black = across(this.column(pair.black), pair);
-    return { re: red.re - black.re, im: red.im - black.im };
+    const current = phasors(this.network.topology.size);
+    addAt(current, pair.red, 1);
+    addAt(current, pair.black, -1);
+    this.solve(current);
+    return across(current, pair);
   }
 }
 

@@ -8,14 +8,7 @@ import {
   type KeptNodes,
 } from './diodeCycle';
 import { POWER_RECTIFIER, type DiodeLaw } from './diodeLaw';
-import {
-  eliminate,
-  impedanceColumn,
-  impedanceDiagonal,
-  passOn,
-  recover,
-  type Elimination,
-} from './elimination';
+import { eliminate, passOn, recover, resistanceBetween, type Elimination } from './elimination';
 import { OPEN_OHMS, SHORTED_DIODE_OHMS } from './faultEffects';
 import {
   FLOATING_OHMS,
@@ -46,8 +39,7 @@ export class RectifiedNetwork implements SettledNetwork {
   private readonly moments: Moments;
   /** Node by node: what each function of the moments contributes to the node's voltage. */
   private readonly rows: Float64Array;
-  private diagonal: Float64Array | undefined;
-  private readonly columns = new Map<number, Float64Array>();
+  private readonly scratch: Float64Array;
   private readonly metered = new Map<string, { cycle: Cycle; moments: Moments }>();
 
   constructor(
@@ -57,6 +49,7 @@ export class RectifiedNetwork implements SettledNetwork {
   ) {
     const { topology } = network;
     const first = topology.size - topology.kept;
+    this.scratch = new Float64Array(topology.size);
     this.hertz = network.sources.find(({ hertz }) => hertz > 0)?.hertz ?? 0;
     this.elimination = eliminate(topology, network.between, network.leak, first);
 
@@ -88,7 +81,7 @@ export class RectifiedNetwork implements SettledNetwork {
 
   read(pair: NodePair, meterOhms: number): SettledReading {
     const weights = this.weights(pair);
-    const inner = this.innerOhms(pair);
+    const inner = resistanceBetween(this.elimination, pair.red, pair.black, this.scratch);
     const keptWeights = weights.slice(0, this.kept.size);
     const siemens = 1 / (meterOhms + inner);
     const meter: Combination = {
@@ -141,20 +134,6 @@ export class RectifiedNetwork implements SettledNetwork {
       if (black !== EARTH_NODE) weights[k]! -= this.rows[black * width + k]!;
     }
     return weights;
-  }
-
-  /** Resistance between the probes with the kept nodes held, ohms. */
-  private innerOhms({ red, black }: NodePair): number {
-    this.diagonal ??= impedanceDiagonal(this.elimination);
-    const at = (node: number) => (node === EARTH_NODE ? 0 : this.diagonal![node]!);
-    let column = this.columns.get(black);
-    if (!column) {
-      column = impedanceColumn(this.elimination, black);
-      this.columns.set(black, column);
-    }
-    const mutual = red === EARTH_NODE || red === black ? at(black) : column[red]!;
-    if (red === black) return 0;
-    return Math.max(0, at(red) + at(black) - 2 * (black === EARTH_NODE ? 0 : mutual));
   }
 
   /** Resistance that the diodes and all behind them put in series, over the cycle's conducting parts. */
