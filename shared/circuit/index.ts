@@ -55,3 +55,4 @@ export {
   type StringStop,
 } from './stringCircuit';
 export { stringCircuit } from './stringNotation';
+export { checkCircuit, circuitFindings, hasErrors, type CheckedCircuit } from './validator';

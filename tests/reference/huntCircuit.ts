@@ -59,6 +59,7 @@ export function huntCircuit(hunt: HuntCircuit): Circuit {
   const supply = hunt.parts.find(({ kind }) => kind === 'supply')!;
   const bridge = hunt.parts.find(({ kind }) => kind === 'bridge');
   const placeNames = new Set([
+    ...Object.keys(hunt.minutes ?? {}),
     ...hunt.terminals.flatMap(({ places }) => places),
     ...hunt.parts.map(({ place }) => place),
   ]);
