@@ -66,13 +66,15 @@ function placesWithoutReturn(circuit: Circuit): CheckFinding[] {
     const withReturn = new Set(
       reached.filter(({ tag }) => tag === line.return).flatMap(({ places }) => places),
     );
-    return [...withString]
-      .filter((place) => !withReturn.has(place))
-      .map((place) => ({
-        code: 'circuit.place-without-return',
+    const without = [...withString].filter((place) => !withReturn.has(place));
+    if (without.length === 0) return [];
+    return [
+      {
+        code: 'circuit.places-without-return',
         severity: 'warning',
         at: `strings.${k}`,
-        details: { string: line.name, place },
-      }));
+        details: { string: line.name, places: without.join(', ') },
+      },
+    ];
   });
 }
