@@ -1,4 +1,4 @@
-import type { Cycle } from './diodeCycle';
+import { sinesOf, type Cycle } from './diodeCycle';
 
 /**
  * Every voltage of a rectified circuit is a fixed combination of the kept nodes' voltages, a constant
@@ -16,40 +16,60 @@ export interface Moments {
   readonly cosines: Float64Array;
 }
 
-/** Moments over every `stride`-th sample. */
-export function momentsOf(cycle: Cycle, kept: number, stride = 1): Moments {
+/** Sums of products over every second sample, from the `first` on. */
+function halfSums(cycle: Cycle, kept: number, first: 0 | 1): Moments {
   const size = kept + 2;
   const means = new Float64Array(size);
   const products = new Float64Array(size * size);
   const sines = new Float64Array(size);
   const cosines = new Float64Array(size);
   const values = new Float64Array(size);
+  const { points, volts } = cycle;
+  const table = sinesOf(points);
+  const quarter = points / 4;
   values[kept] = 1;
-  const count = cycle.points / stride;
-  for (let j = 0; j < cycle.points; j += stride) {
-    for (let k = 0; k < kept; k++) values[k] = cycle.volts[j * kept + k]!;
-    const angle = (2 * Math.PI * j) / cycle.points;
-    const sine = Math.sin(angle);
-    const cosine = Math.cos(angle);
+  for (let j = first; j < points; j += 2) {
+    for (let k = 0; k < kept; k++) values[k] = volts[j * kept + k]!;
+    const sine = table[j]!;
+    const cosine = table[(j + quarter) % points]!;
     values[kept + 1] = sine;
     for (let a = 0; a < size; a++) {
       const value = values[a]!;
       means[a]! += value;
-      sines[a]! += 2 * value * sine;
-      cosines[a]! += 2 * value * cosine;
+      sines[a]! += value * sine;
+      cosines[a]! += value * cosine;
       for (let b = a; b < size; b++) products[a * size + b]! += value * values[b]!;
     }
   }
-  for (let a = 0; a < size; a++) {
-    means[a]! /= count;
-    sines[a]! /= count;
-    cosines[a]! /= count;
-    for (let b = a; b < size; b++) {
-      products[a * size + b]! /= count;
-      products[b * size + a] = products[a * size + b]!;
-    }
-  }
   return { size, means, products, sines, cosines };
+}
+
+/** Moments over all samples; and over every second one, to see what half the samples would have said. */
+export function momentsOf(
+  cycle: Cycle,
+  kept: number,
+): { readonly all: Moments; readonly half: Moments } {
+  const even = halfSums(cycle, kept, 0);
+  const odd = halfSums(cycle, kept, 1);
+  const { points } = cycle;
+  const scaled = (a: Float64Array, b: Float64Array | undefined, factor: number) =>
+    a.map((value, k) => (value + (b ? b[k]! : 0)) * factor);
+  const moments = (other: Moments | undefined, count: number): Moments => ({
+    size: even.size,
+    means: scaled(even.means, other?.means, 1 / count),
+    products: mirrored(scaled(even.products, other?.products, 1 / count), even.size),
+    sines: scaled(even.sines, other?.sines, 2 / count),
+    cosines: scaled(even.cosines, other?.cosines, 2 / count),
+  });
+  return { all: moments(odd, points), half: moments(undefined, points / 2) };
+}
+
+/** The lower triangle filled in from the upper one, in place. */
+function mirrored(products: Float64Array, size: number): Float64Array {
+  for (let a = 0; a < size; a++) {
+    for (let b = a + 1; b < size; b++) products[b * size + a] = products[a * size + b]!;
+  }
+  return products;
 }
 
 /** Mean of the square of a combination. Rounding may leave a trace below zero: it is cut off. */

@@ -152,6 +152,18 @@ class Newton {
   }
 }
 
+const sineTables = new Map<number, Float64Array>();
+
+/** The sine at `points` even steps of a cycle; kept, since every cycle needs it. */
+export function sinesOf(points: number): Float64Array {
+  let table = sineTables.get(points);
+  if (!table) {
+    table = Float64Array.from({ length: points }, (_, j) => Math.sin((2 * Math.PI * j) / points));
+    sineTables.set(points, table);
+  }
+  return table;
+}
+
 export function dot(a: Float64Array, b: Float64Array): number {
   let sum = 0;
   for (let k = 0; k < a.length; k++) sum += a[k]! * b[k]!;
@@ -174,9 +186,10 @@ export function sampleCycle(
   const junctions = new Float64Array(points * diodes.length);
   const impedances = new Float64Array(PHASES * size * size);
   const now = new Float64Array(diodes.length);
+  const sines = sinesOf(points);
   for (let j = 0; j < points; j++) {
     if (near) now.set(near.junctions.subarray(j * diodes.length, (j + 1) * diodes.length));
-    newton.settle(Math.sin((2 * Math.PI * j) / points), now);
+    newton.settle(sines[j]!, now);
     volts.set(newton.volts, j * size);
     junctions.set(now, j * diodes.length);
     const phase = (j * PHASES) / points;

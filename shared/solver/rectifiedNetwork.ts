@@ -67,16 +67,13 @@ export class RectifiedNetwork implements SettledNetwork {
     this.rows = combinationRows(this.elimination, direct, sine);
 
     let cycle = sampleCycle(this.kept, points);
-    let moments = momentsOf(cycle, this.kept.size);
-    while (
-      cycle.points < MOST_POINTS &&
-      largestMove(moments, momentsOf(cycle, this.kept.size, 2)) >= POINTS_VOLTS
-    ) {
+    let { all, half } = momentsOf(cycle, this.kept.size);
+    while (cycle.points < MOST_POINTS && largestMove(all, half) >= POINTS_VOLTS) {
       cycle = sampleCycle(this.kept, cycle.points * 2);
-      moments = momentsOf(cycle, this.kept.size);
+      ({ all, half } = momentsOf(cycle, this.kept.size));
     }
     this.cycle = cycle;
-    this.moments = moments;
+    this.moments = all;
   }
 
   read(pair: NodePair, meterOhms: number): SettledReading {
@@ -169,7 +166,7 @@ export class RectifiedNetwork implements SettledNetwork {
     let found = this.metered.get(key);
     if (!found) {
       const cycle = sampleCycle(this.kept, this.cycle.points, meter, this.cycle);
-      found = { cycle, moments: momentsOf(cycle, this.kept.size) };
+      found = { cycle, moments: momentsOf(cycle, this.kept.size).all };
       this.metered.set(key, found);
     }
     return found;
