@@ -1,4 +1,4 @@
-import { sinesOf, type Cycle } from './diodeCycle';
+import { sinesOf, type Cycle } from './cycle';
 
 /**
  * Every voltage of a rectified circuit is a fixed combination of the kept nodes' voltages, a constant

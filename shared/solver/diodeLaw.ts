@@ -6,6 +6,8 @@ export interface DiodeLaw {
   readonly emission: number;
   /** RS, ohms. */
   readonly seriesOhms: number;
+  /** Conductance beside the junction, siemens; decides where a blocked bridge floats. Default 1e-12. */
+  readonly leakSiemens?: number;
 }
 
 /** A power rectifier of about 1 A; the law behind the readings in `tests/reference/data`. */
@@ -33,8 +35,9 @@ export function junction(law: DiodeLaw, volts: number, out: Float64Array): void 
     out[0] = grown - law.saturationAmps;
     out[1] = grown / scale;
   }
-  out[0]! += JUNCTION_LEAK_SIEMENS * volts;
-  out[1]! += JUNCTION_LEAK_SIEMENS;
+  const leak = law.leakSiemens ?? JUNCTION_LEAK_SIEMENS;
+  out[0]! += leak * volts;
+  out[1]! += leak;
 }
 
 /** Voltage above which a Newton step on a junction must be shortened, volts. */

@@ -1,15 +1,10 @@
 import { momentsOf, largestMove, squareOf, type Moments } from './cycleMoments';
-import {
-  dot,
-  PHASES,
-  sampleCycle,
-  type Combination,
-  type Cycle,
-  type KeptNodes,
-} from './diodeCycle';
+import { sampleCycle } from './diodeCycle';
+import { combinationRows, keptNodes, type Combination, type KeptNodes } from './keptNodes';
+import { PHASES, type Cycle } from './cycle';
+import { dot } from './diodeNewton';
 import { POWER_RECTIFIER, type DiodeLaw } from './diodeLaw';
-import { eliminate, passOn, recover, resistanceBetween, type Elimination } from './elimination';
-import { OPEN_OHMS, SHORTED_DIODE_OHMS } from './faultEffects';
+import { eliminate, passOn, resistanceBetween, type Elimination } from './elimination';
 import {
   FLOATING_OHMS,
   type CoilCurrent,
@@ -17,7 +12,7 @@ import {
   type SettledNetwork,
 } from './settledNetwork';
 import type { SettledReading } from './solution';
-import type { StampedBridge, StampedNetwork } from './stamping';
+import type { StampedNetwork } from './stamping';
 import { EARTH_NODE } from './topology';
 
 /** Samples of a cycle to begin with, and at most. */
@@ -137,12 +132,12 @@ export class RectifiedNetwork implements SettledNetwork {
   private outerOhms(cycle: Cycle, weights: Float64Array): number {
     let siemens = 0;
     for (let phase = 0; phase < PHASES; phase++) {
-      siemens += 1 / this.phaseOhms(cycle, phase, weights);
+      siemens += 1 / this.phaseOhms(cycle.impedances, phase, weights);
     }
     return PHASES / siemens;
   }
 
-  private phaseOhms({ impedances }: Cycle, phase: number, weights: Float64Array): number {
+  private phaseOhms(impedances: Float64Array, phase: number, weights: Float64Array): number {
     const { size } = this.kept;
     let ohms = 0;
     for (let a = 0; a < size; a++) {
@@ -172,94 +167,20 @@ export class RectifiedNetwork implements SettledNetwork {
     return found;
   }
 
+  /** Whether the meter's own current would move the kept nodes by more than a display shows. */
   private feels(meter: Combination, weights: Float64Array): boolean {
-    const { size } = this.kept;
-    const { points, volts } = this.cycle;
+    const { size, capacitors } = this.kept;
+    const { points, volts, momentary } = this.cycle;
+    const ohms = (phase: number) => this.phaseOhms(momentary, phase, meter.weights);
+    // Charge carries the meter's current on from where the diodes conduct, so its mean counts as well.
+    const lasting = capacitors.length > 0 ? this.outerOhms(this.cycle, meter.weights) : 0;
     for (let phase = 0; phase < PHASES; phase++) {
       const j = (phase * points) / PHASES;
       let value = weights[size]! + weights[size + 1]! * Math.sin((2 * Math.PI * j) / points);
       for (let k = 0; k < size; k++) value += weights[k]! * volts[j * size + k]!;
-      const drop = this.phaseOhms(this.cycle, phase, meter.weights) * meter.siemens * value;
+      const drop = Math.max(lasting, ohms(phase)) * meter.siemens * value;
       if (Math.abs(drop) > UNFELT_VOLTS) return true;
     }
     return false;
   }
-}
-
-function keptNodes(
-  network: StampedNetwork,
-  elimination: Elimination,
-  direct: Float64Array,
-  sine: Float64Array,
-  law: DiodeLaw,
-): KeptNodes {
-  const { topology } = network;
-  const size = topology.kept;
-  const first = topology.size - size;
-  const leak = elimination.leak.slice(first);
-  const between = new Float64Array(size * size);
-  for (let a = 0; a < size; a++) {
-    for (let b = a + 1; b < size; b++) {
-      between[a * size + b] = elimination.between[topology.edge(first + a, first + b)]!;
-    }
-  }
-  const local = (node: number) => (node === EARTH_NODE ? -1 : node - first);
-  const join = (a: number, b: number, siemens: number) => {
-    if (a === b) return;
-    if (a < 0) leak[b]! += siemens;
-    else if (b < 0) leak[a]! += siemens;
-    else between[Math.min(a, b) * size + Math.max(a, b)]! += siemens;
-  };
-  const diodes: (readonly [number, number])[] = [];
-  for (const bridge of network.bridges) {
-    diodesOf(bridge).forEach(([anode, cathode], index) => {
-      const state = bridge.diodes.get(index + 1);
-      if (state === undefined) diodes.push([local(anode), local(cathode)]);
-      else
-        join(local(anode), local(cathode), 1 / (state === 'open' ? OPEN_OHMS : SHORTED_DIODE_OHMS));
-    });
-  }
-  const windings = network.transformers.map(({ primary, secondary, ratio, siemens }) => {
-    const weights = new Float64Array(size);
-    const put = (node: number, weight: number) => {
-      if (node !== EARTH_NODE) weights[node - first]! += weight;
-    };
-    put(secondary[0], 1);
-    put(secondary[1], -1);
-    put(primary[0], -ratio);
-    put(primary[1], ratio);
-    return { weights, siemens, direct: 0, sine: 0 };
-  });
-  return { size, between, leak, direct, sine, diodes, windings, law };
-}
-
-/** Anode and cathode of diodes 1 to 4 of a bridge. */
-function diodesOf({ nodes: [a1, a2, plus, minus] }: StampedBridge): readonly [number, number][] {
-  return [
-    [a1, plus],
-    [a2, plus],
-    [minus, a1],
-    [minus, a2],
-  ];
-}
-
-/** By node: the weight of each kept node's voltage, of the constant and of the sine in its own. */
-function combinationRows(
-  elimination: Elimination,
-  direct: Float64Array,
-  sine: Float64Array,
-): Float64Array {
-  const { size, kept } = elimination.topology;
-  const first = size - kept;
-  const width = kept + 2;
-  const rows = new Float64Array(size * width);
-  const values = new Float64Array(size);
-  for (let k = 0; k < width; k++) {
-    values.fill(0);
-    if (k < kept) values[first + k] = 1;
-    else values.set((k === kept ? direct : sine).subarray(0, first));
-    recover(elimination, values);
-    for (let node = 0; node < size; node++) rows[node * width + k] = values[node]!;
-  }
-  return rows;
 }

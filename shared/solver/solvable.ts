@@ -4,21 +4,12 @@ import { hertzOf } from './stamping';
 
 /**
  * What the solver cannot do with a circuit, before it is asked to: errors make readings wrong.
- * Capacitors beside a bridge count as open, since smoothing needs a periodic solution over charge.
+ * Beside a bridge all alternating supplies must have one frequency, since one cycle of it is sampled.
  */
 export function solvable(circuit: Circuit): readonly CheckFinding[] {
   const findings: CheckFinding[] = [];
   const rectified = circuit.parts.some(({ kind }) => kind === 'bridge');
   if (!rectified) return findings;
-  circuit.parts.forEach((part, index) => {
-    if (part.kind !== 'capacitor') return;
-    findings.push({
-      code: 'solver.capacitor-with-bridge',
-      severity: 'error',
-      at: `parts.${index}`,
-      details: { part: part.name },
-    });
-  });
   const frequencies = new Set(
     circuit.parts.flatMap((part) =>
       part.kind === 'supply' && part.current === 'alternating' ? [hertzOf(part)] : [],

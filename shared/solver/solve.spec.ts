@@ -233,3 +233,47 @@ describe('a rectified string', () => {
     }
   });
 });
+
+describe('a smoothed string', () => {
+  const rectified = stringCircuit('124 V bridge earthed: T0 (gate) T1 [LR 3300 ohm]');
+  const smoothed = (farads: number): Circuit => ({
+    ...rectified,
+    parts: [
+      ...rectified.parts,
+      {
+        kind: 'capacitor',
+        name: 'smoothing',
+        place: 'controller',
+        weight: 0,
+        between: ['S', 'N'],
+        farads,
+      },
+    ],
+  });
+
+  it('has more volts and less ripple the more capacitance it has', () => {
+    const readings = [1e-6, 1e-5, 1e-4, 1e-3].map((farads) => volts(smoothed(farads), 'T1', 'R'));
+    const none = volts(rectified, 'T1', 'R');
+    [none, ...readings].reduce((less, more) => {
+      expect(more.mean).toBeGreaterThan(less.mean);
+      expect(more.ripple).toBeLessThan(less.ripple);
+      return more;
+    });
+    expect(readings.at(-1)!.mean).toBeLessThan(124 * Math.SQRT2);
+  });
+
+  it('falls by about i/(2·f·C) between two peaks', () => {
+    const reading = volts(smoothed(1e-3), 'T1', 'R');
+    const peakToPeak = reading.mean / 3300 / (100 * 1e-3);
+    // A saw-tooth of that height has an RMS of its height over 2·√3.
+    expect(reading.ripple).toBeGreaterThan((0.8 * peakToPeak) / (2 * Math.sqrt(3)));
+    expect(reading.ripple).toBeLessThan((1.01 * peakToPeak) / (2 * Math.sqrt(3)));
+  });
+
+  it('charges to the peak where nothing draws current', () => {
+    const open: Fault = { part: 'fuse', mode: 'blown' };
+    const reading = volts(smoothed(1e-4), 'S', 'N', open);
+    expect(reading.mean).toBeGreaterThan(124 * Math.SQRT2 - 2 * 0.7);
+    expect(reading.ripple).toBeLessThan(0.1);
+  });
+});

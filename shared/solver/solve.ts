@@ -24,8 +24,8 @@ export interface SolveOptions {
  * The reference solver: what settles in one lift state with these faults.
  *
  * Circuits without a bridge are solved by phasors, each frequency by itself, capacitors included.
- * Circuits with a bridge are reduced to its nodes and sampled over a cycle; there a capacitor counts as
- * open and one frequency is taken for all supplies (`solvable` says so beforehand).
+ * Circuits with a bridge are reduced to its nodes and sampled over a cycle, which capacitors make one
+ * that ends as it begins; one frequency is taken for all supplies there (`solvable` says so beforehand).
  * Volts are RMS or mean as {@link SettledReading} says; phases of all supplies are equal.
  */
 export function solve(

@@ -1,4 +1,4 @@
-import { EARTH, type Circuit } from '../circuit/circuit';
+import { EARTH, type Circuit, type Part } from '../circuit/circuit';
 import { tagsOf } from '../circuit/tags';
 
 /** Node number of earth, which is the reference and has no row of its own. */
@@ -8,7 +8,7 @@ export const EARTH_NODE = -1;
  * Which nodes a circuit joins, and the order of their elimination, worked out once: states and faults
  * change values only, since what is open stays as a very large resistance.
  * Nodes are numbered in the order of elimination; the last `kept` ones are those of bridges and
- * transformers, on which the rest is solved.
+ * transformers, and of capacitors beside a bridge, on which the rest is solved.
  */
 export interface Topology {
   readonly nodes: ReadonlyMap<string, number>;
@@ -43,6 +43,9 @@ function buildTopology(circuit: Circuit): Topology {
   const tags = new Set(circuit.terminals.map(({ tag }) => tag));
   const keptTags = new Set<string>();
   const links = new Map<string, Set<string>>();
+  const rectified = circuit.parts.some(({ kind }) => kind === 'bridge');
+  const isKept = ({ kind }: Part) =>
+    kind === 'bridge' || kind === 'transformer' || (rectified && kind === 'capacitor');
   const link = (a: string, b: string) => {
     if (a === b || a === EARTH || b === EARTH) return;
     links.get(a)!.add(b);
@@ -52,11 +55,8 @@ function buildTopology(circuit: Circuit): Topology {
   tags.delete(EARTH);
   for (const tag of tags) links.set(tag, new Set());
   for (const part of circuit.parts) {
-    if (part.kind === 'bridge' || part.kind === 'transformer') {
-      for (const tag of tagsOf(part)) if (tag !== EARTH) keptTags.add(tag);
-    } else {
-      link(part.between[0], part.between[1]);
-    }
+    if (part.kind !== 'bridge' && part.kind !== 'transformer') link(...part.between);
+    if (isKept(part)) for (const tag of tagsOf(part)) if (tag !== EARTH) keptTags.add(tag);
   }
   const kept = [...keptTags];
   for (const a of kept) for (const b of kept) link(a, b);

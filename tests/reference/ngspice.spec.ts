@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { solve } from '@shared/solver';
+import { POWER_RECTIFIER, solve } from '@shared/solver';
 import { randomLift } from './randomLift';
 import { hasNgspice, spiceReadings } from './spice';
 
@@ -17,7 +17,12 @@ const VOLTS = 0.1;
 describe.runIf(hasNgspice)('against ngspice', () => {
   it.each(SEEDS)('circuit of seed %d', (seed) => {
     const { circuit, faults, probes } = randomLift(seed);
-    const solution = solve(circuit, {}, faults);
+    // Smoothed bridges block for most of the cycle, and their AC side then lies where the leak of the
+    // junctions puts it; ngspice needs more of that to get through a cycle with charge. Both get the same.
+    const smoothed = circuit.parts.some(({ name }) => name === 'smoothing');
+    const diodeLeak = smoothed ? 1e-9 : 1e-12;
+    const diodeLaw = { ...POWER_RECTIFIER, leakSiemens: diodeLeak };
+    const solution = solve(circuit, {}, faults, { diodeLaw });
     const expected = spiceReadings({
       circuit,
       state: {},
@@ -26,6 +31,7 @@ describe.runIf(hasNgspice)('against ngspice', () => {
       probes,
       meterOhms: METER,
       hertz: HERTZ,
+      diodeLeak,
     });
     probes.forEach(([red, black], k) => {
       const reading = solution.read({ red, black, meterOhms: METER });

@@ -17,7 +17,15 @@ export interface RandomLift {
   readonly probes: readonly (readonly [string, string])[];
 }
 
-const KINDS = ['DC', 'AC', 'bridge', 'bridge last', 'fed bridge', 'AC with cable'] as const;
+const KINDS = [
+  'DC',
+  'AC',
+  'bridge',
+  'bridge last',
+  'fed bridge',
+  'AC with cable',
+  'smoothed bridge',
+] as const;
 
 /** A string of 8 to 20 parts with one to three coils, a fault in most, and pairs of probes. */
 export function randomLift(seed: number): RandomLift {
@@ -112,6 +120,17 @@ function extended(
           ratio: 0.5,
           ohms: between(0.5, 4),
         },
+      ],
+    };
+  }
+  if (kind === 'smoothed bridge') {
+    const farads = between(2e-5, 3e-4);
+    return {
+      ...line,
+      parts: [
+        ...line.parts,
+        { ...at, kind: 'capacitor', name: 'smoothing', between: ['S', 'N'], farads },
+        { ...at, kind: 'capacitor', name: 'suppressor', between: ['T3', 'R'], farads: 1e-7 },
       ],
     };
   }

@@ -119,3 +119,34 @@ describe('a real rectifier', () => {
     expect(Math.abs(light.mean - (0.900316 * 110 - 2 * 0.7))).toBeLessThan(0.2);
   });
 });
+
+describe('a smoothed rectifier', () => {
+  // Source: simulated (C): 110 V 50 Hz, two drops of 0.7 V, 100 µF, 1210 ohm. Here the diodes have no
+  // drop and the supply is lower by both drops at its peak, which is the same.
+  const IDEAL: DiodeLaw = { saturationAmps: 1e-9, emission: 1e-3, seriesOhms: 1e-4 };
+  const resistive = bridge(110 - (2 * 0.7) / Math.SQRT2, 1e-5, 1210);
+  const circuit: Circuit = {
+    ...resistive,
+    parts: [
+      ...resistive.parts,
+      {
+        kind: 'capacitor',
+        name: 'smoothing',
+        place: 'controller',
+        weight: 1,
+        between: ['P', 'M'],
+        farads: 1e-4,
+      },
+    ],
+  };
+
+  it.each<[string, readonly Fault[], number, number, number]>([
+    ['full wave', [], 148.95, 3.191, 100],
+    ['half wave', [open(1)], 143.44, 6.354, 50],
+  ])('%s', (_name, faults, mean, ripple, hertz) => {
+    const reading = read(circuit, IDEAL, faults);
+    expect(Math.abs(reading.mean - mean)).toBeLessThan(0.1);
+    expect(Math.abs(reading.ripple - ripple)).toBeLessThan(0.05);
+    expect(reading.hertz).toBe(hertz);
+  });
+});

@@ -16,6 +16,7 @@ const OPEN = 1e9;
 const LEAK = 1e12;
 /** Steps of a cycle, and cycles before the one that is measured. */
 const STEPS = 2000;
+const CHARGING_CYCLES = 50;
 
 export interface SpiceRun {
   readonly circuit: Circuit;
@@ -25,6 +26,8 @@ export interface SpiceRun {
   readonly probes: readonly (readonly [string, string])[];
   readonly meterOhms: number;
   readonly hertz: number;
+  /** Siemens beside every junction. */
+  readonly diodeLeak: number;
 }
 
 export interface SpiceReading {
@@ -63,10 +66,14 @@ function deck(run: SpiceRun, table: string): string {
     lines.push(`Rmeter${copy} ${node(red)} ${node(black)} ${run.meterOhms}`);
     lines.push(`Eout${copy} out${copy} 0 ${node(red)} ${node(black)} 1`);
   });
-  const cycles = run.circuit.parts.some(({ kind }) => kind === 'capacitor') ? 40 : 1;
+  const charged = run.circuit.parts.some(({ kind }) => kind === 'capacitor');
+  const cycles = charged ? CHARGING_CYCLES : 1;
   lines.push(
     '.model rectifier D(IS=1e-9 N=1.7 RS=0.05)',
-    '.options reltol=1e-5 abstol=1e-11 vntol=1e-6 gmin=1e-12 itl4=200',
+    // Charge makes ngspice stumble over tolerances that do well without.
+    charged
+      ? `.options reltol=1e-3 abstol=1e-9 vntol=1e-4 gmin=${run.diodeLeak} itl4=200`
+      : `.options reltol=1e-5 abstol=1e-11 vntol=1e-6 gmin=${run.diodeLeak} itl4=200`,
     '.control',
     `tran ${period / STEPS} ${(cycles + 1) * period} ${cycles * period} ${period / STEPS}`,
     'set wr_singlescale',
