@@ -45,6 +45,13 @@ describe('single faults', () => {
     for (const step of steps) expect(step).toBeLessThanOrEqual(10);
   });
 
+  it('have diodes short to open as .49 to .36', () => {
+    // Source: MIL-HDBK-338B, failure mode distributions, rectifier diodes (R).
+    const [shorted] = of('bridge').filter(({ fault }) => fault.mode === 'diode shorted');
+    const [open] = of('bridge').filter(({ fault }) => fault.mode === 'diode open');
+    expect(shorted!.weight / open!.weight).toBeCloseTo(0.49 / 0.36, 9);
+  });
+
   it('put an earth at every terminal but the earthed one, with little weight', () => {
     const earths = faults.filter(({ fault }) => fault.mode === 'earth');
     expect(earths.map(({ fault }) => fault.part).sort()).toEqual(

@@ -9,6 +9,9 @@ export const EARTH_FAULT_OHMS = 1;
 /** Effective turns left of a partly shorted coil where the fault does not say. */
 export const PARTLY_SHORTED_TURNS = 0.5;
 
+/** The least that a fault can bring a resistance down to, ohms: as little as a part may have. */
+export const LEAST_OHMS = 1e-6;
+
 export type DiodeState = 'open' | 'shorted';
 
 /** What a set of faults changes, by part name: what stamping and the relays look up. */
@@ -37,6 +40,9 @@ export function effectsOf(faults: readonly Fault[]): FaultEffects {
   const turns = new Map<string, number>();
   const stuck = new Map<string, 'in' | 'out'>();
   const earths: { tag: string; ohms: number }[] = [];
+  const replace = (part: string, value: number | undefined) => {
+    if (value !== undefined) ohms.set(part, Math.max(value, LEAST_OHMS));
+  };
   for (const fault of faults) {
     switch (fault.mode) {
       case 'open':
@@ -49,11 +55,11 @@ export function effectsOf(faults: readonly Fault[]): FaultEffects {
         break;
       case 'resistive':
       case 'weak':
-        if (fault.ohms !== undefined) ohms.set(fault.part, fault.ohms);
+        replace(fault.part, fault.ohms);
         break;
       case 'not opening':
         notOpening.add(fault.part);
-        if (fault.ohms !== undefined) ohms.set(fault.part, fault.ohms);
+        replace(fault.part, fault.ohms);
         break;
       case 'low':
       case 'high':
@@ -68,7 +74,7 @@ export function effectsOf(faults: readonly Fault[]): FaultEffects {
       }
       case 'partly shorted':
         turns.set(fault.part, fault.factor ?? PARTLY_SHORTED_TURNS);
-        if (fault.ohms !== undefined) ohms.set(fault.part, fault.ohms);
+        replace(fault.part, fault.ohms);
         break;
       case 'stuck in':
         stuck.set(fault.part, 'in');
@@ -77,7 +83,10 @@ export function effectsOf(faults: readonly Fault[]): FaultEffects {
         stuck.set(fault.part, 'out');
         break;
       case 'earth':
-        earths.push({ tag: fault.part, ohms: fault.ohms ?? EARTH_FAULT_OHMS });
+        earths.push({
+          tag: fault.part,
+          ohms: Math.max(fault.ohms ?? EARTH_FAULT_OHMS, LEAST_OHMS),
+        });
         break;
     }
   }

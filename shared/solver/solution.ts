@@ -1,6 +1,9 @@
 import type { RelayPosition } from '../circuit/circuit';
 
-/** Two probes and the meter's own impedance. The reading is red minus black. */
+/**
+ * Two probes and the meter's own impedance. The reading is red minus black. Either may be `EARTH`: the
+ * mass of the building, as if a probe reached it.
+ */
 export interface Probes {
   readonly red: string;
   readonly black: string;

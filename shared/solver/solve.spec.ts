@@ -77,6 +77,13 @@ describe('a DC string', () => {
     expect(reading.mean).toBeCloseTo((110 * (coils + 0.5)) / (300 + 0.1 + 0.5 + coils + 0.1), 1);
   });
 
+  it('stays finite with faults of 0 ohm', () => {
+    const dead: Fault = { part: 'T0', mode: 'earth', ohms: 0 };
+    expect(volts(lift, 'T0', 'earth', dead).mean).toBeCloseTo(0, 3);
+    const weak: Fault = { part: 'supply', mode: 'weak', ohms: 0 };
+    expect(volts(lift, 'S', 'N', weak).mean).toBeCloseTo(110, 3);
+  });
+
   it('refuses a tag that the circuit lacks', () => {
     expect(() => volts(lift, 'T99', 'R')).toThrow(RangeError);
   });
