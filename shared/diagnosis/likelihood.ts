@@ -1,0 +1,47 @@
+import type { RelayPosition } from '../circuit';
+import type { Meter } from './observation';
+import type { Prediction } from './predictions';
+
+/** Share of readings that are mistaken: wrong tag, wrong function, misread (judgement, 0 to 0.2). */
+export const SLIP = 0.02;
+/** One standard deviation of the model itself: supply, resistances; of the value (judgement). */
+export const MODEL_ERROR = 0.02;
+/** The least standard deviation of a comparison, volts: leakage and resistances not drawn. */
+export const LEAST_DEVIATION_VOLTS = 0.3;
+/** Share of relay positions that are mistaken when seen (judgement). */
+export const RELAY_SLIP = 0.01;
+
+/** One standard deviation of what the meter shows where this is predicted, volts. */
+export function deviationOf(volts: number, meter: Meter): number {
+  return Math.hypot(
+    (volts * meter.accuracyPercent) / 100,
+    volts * MODEL_ERROR,
+    meter.stepVolts,
+    LEAST_DEVIATION_VOLTS,
+  );
+}
+
+/** Density of a reading anywhere on the scale, per volt: what a slip or a thing not drawn shows. */
+export function anywhere(scaleVolts: number): number {
+  return 1 / (2.4 * scaleVolts);
+}
+
+/** Density of the shown volts if this prediction holds. `slip` is the share of mistaken readings. */
+export function readingLikelihood(
+  volts: number,
+  predicted: Prediction,
+  meter: Meter,
+  scaleVolts: number,
+  slip = SLIP,
+): number {
+  const flat = anywhere(scaleVolts);
+  if (predicted.floating) return flat;
+  const deviation = deviationOf(predicted.volts, meter);
+  const z = (volts - predicted.volts) / deviation;
+  const peak = Math.exp(-z * z * 0.5) / (deviation * Math.sqrt(2 * Math.PI));
+  return (1 - slip) * peak + slip * flat;
+}
+
+export function relayLikelihood(seen: RelayPosition, predicted: RelayPosition | undefined): number {
+  return seen === predicted ? 1 - RELAY_SLIP : RELAY_SLIP / 2;
+}
