@@ -1,7 +1,17 @@
 import { finestSections, type Circuit, type Fault, type RelayPosition } from '../circuit';
-import type { Advice, AdviceRequest, Reason, Step, Stopping, Suggestion, Suspect } from './advice';
+import type {
+  Advice,
+  AdviceRequest,
+  Danger,
+  Reason,
+  Step,
+  Stopping,
+  Suggestion,
+  Suspect,
+} from './advice';
 import { beliefOf, setUpKey, type Belief } from './belief';
 import { candidatesOf, functionOf, type Candidate } from './candidates';
+import { dangersOf } from './danger';
 import { hypothesesOf, type Hypothesis } from './hypotheses';
 import { deviationOf } from './likelihood';
 import type { Observation, ReadingObservation } from './observation';
@@ -48,6 +58,7 @@ const reason = (code: string, more: Partial<Reason> = {}): Reason => ({
 class Consultation {
   private readonly candidates: readonly Candidate[];
   private readonly belief: Belief;
+  private readonly dangers: readonly Danger[];
   private readonly readings: readonly ReadingObservation[];
   private readonly classes: readonly (readonly number[])[];
 
@@ -59,6 +70,7 @@ class Consultation {
   ) {
     this.candidates = candidatesOf(circuit, request);
     this.belief = this.believe(request.observations);
+    this.dangers = dangersOf(circuit, request.observations);
     this.readings = request.observations.filter((seen) => seen.kind === 'reading');
     this.classes = this.classesOf();
   }
@@ -152,7 +164,7 @@ class Consultation {
       believed: this.share(this.belief, top) >= BELIEVED,
       withoutAnyOnePair: without.every((belief) => this.share(belief, top) >= WITHOUT_ONE_PAIR),
       described: this.belief.notDescribed < MOST_NOT_DESCRIBED,
-      noDanger: true,
+      noDanger: this.dangers.length === 0,
     };
   }
 
@@ -171,6 +183,7 @@ class Consultation {
   }
 
   private step(stopping: Stopping): Step {
+    if (this.dangers.length > 0) return { kind: 'stop', dangers: [...this.dangers] };
     const proof = this.proof();
     if (proof) return { kind: 'suggestion', suggestion: proof };
     const top = this.classes[0] ?? [];
