@@ -34,3 +34,4 @@ export {
   type Suspect,
 } from './advice';
 export { ENGINE, createEngine, type Engine } from './advise';
+export { bestCuts, type CutPlan } from './cutTree';
