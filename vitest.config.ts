@@ -25,6 +25,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'api',
+          globalSetup: './tests/api/cluster.ts',
           include: [
             'api/**/*.spec.ts',
             'seeds/**/*.spec.ts',
