@@ -95,9 +95,10 @@ BEGIN
   RETURN 0;
 END $$;
 --> statement-breakpoint
-CREATE FUNCTION door.forget_guesses(wanted text) RETURNS void
+-- The guess was right: it does not count.
+CREATE FUNCTION door.give_back_guess(wanted text) RETURNS void
 LANGUAGE sql VOLATILE SECURITY DEFINER SET search_path = public, pg_temp AS $$
-  DELETE FROM throttle WHERE bucket = wanted
+  UPDATE throttle SET level = greatest(0, level - 1) WHERE bucket = wanted
 $$;
 --> statement-breakpoint
 -- Buckets that have long run dry; called now and then, so that the table stays small.
@@ -118,7 +119,7 @@ ALTER FUNCTION door.session_by_token(bytea) OWNER TO lampline_door;
 --> statement-breakpoint
 ALTER FUNCTION door.take_guess(text, double precision, double precision, timestamptz) OWNER TO lampline_door;
 --> statement-breakpoint
-ALTER FUNCTION door.forget_guesses(text) OWNER TO lampline_door;
+ALTER FUNCTION door.give_back_guess(text) OWNER TO lampline_door;
 --> statement-breakpoint
 ALTER FUNCTION door.sweep_guesses(timestamptz) OWNER TO lampline_door;
 --> statement-breakpoint
