@@ -3,7 +3,7 @@ import pino from 'pino';
 import { v7 } from 'uuid';
 import { createApp } from './app';
 import { readConfig, type Config } from './config';
-import { warmUp } from './features/session/password';
+import { warmUp } from './platform/password';
 import { checkDatabase } from './platform/db/bootCheck';
 import { openDatabase } from './platform/db/doors';
 

@@ -1,6 +1,6 @@
 import { v7 } from 'uuid';
 import { digestOfToken, newToken } from '../../api/features/session/secrets';
-import { hashPassword } from '../../api/features/session/password';
+import { hashPassword } from '../../api/platform/password';
 import type { AsOwner } from '../../api/platform/db/doors';
 import {
   organisation,

@@ -3,7 +3,7 @@ import { appendAudit } from '../../platform/db/audit';
 import { Refusal } from '../../platform/refusal';
 import type { Services } from '../../platform/services';
 import { countGuess } from './guessing';
-import { hashPassword, isOutdated, isPassword } from './password';
+import { hashPassword, isOutdated, isPassword } from '../../platform/password';
 import { accountByEmail, savePasswordHash, startSession, type SessionKey } from './repository';
 import { digestOfToken, markDevice, newToken } from './secrets';
 

@@ -1,5 +1,5 @@
 import argon2 from 'argon2';
-import { Refusal } from '../../platform/refusal';
+import { Refusal } from './refusal';
 
 /** security.md: argon2id with at least these; `memoryCost` in KiB. */
 const PARAMETERS = { memoryCost: 19_456, timeCost: 2, parallelism: 1 } as const;
