@@ -61,7 +61,9 @@ async function drain(): Promise<void> {
   });
   clearTimeout(cut);
   await database.close();
-  if (process.connected) process.disconnect();
+  process.exit(0);
 }
 process.on('SIGTERM', () => void drain());
 process.on('SIGINT', () => void drain());
+// Started by the local start: when that one is killed, nobody else would end this process.
+if (process.connected) process.on('disconnect', () => void drain());

@@ -23,6 +23,8 @@ export interface Cluster {
   readonly ownerUrl: string;
   /** Signs in as `lampline_app`; its password is set when the database is prepared. */
   readonly applicationUrl: string;
+  /** 32 random bytes as base64url, kept with the cluster: sign-ins outlive a restart. */
+  readonly sessionSecret: string;
   stop(): Promise<void>;
 }
 
@@ -30,6 +32,7 @@ export interface Cluster {
 interface Secrets {
   readonly owner: string;
   readonly application: string;
+  readonly session: string;
 }
 
 /** A killed postmaster may hold its pid file for two seconds; then its port; milliseconds in all. */
@@ -66,6 +69,7 @@ export async function startCluster(folder: string): Promise<Cluster> {
         port,
         ownerUrl: url(OWNER, secrets.owner),
         applicationUrl: url('lampline_app', secrets.application),
+        sessionSecret: secrets.session,
         stop: () => stopServer(pid),
       };
     }
@@ -94,6 +98,7 @@ function createCluster(programs: string, folder: string, account: Account | unde
   const secrets: Secrets = {
     owner: randomBytes(24).toString('base64url'),
     application: randomBytes(24).toString('base64url'),
+    session: randomBytes(32).toString('base64url'),
   };
   writeFileSync(secretsFile(folder), JSON.stringify(secrets), { mode: 0o600 });
   const passwordFile = join(folder, 'owner-password');
