@@ -11,7 +11,7 @@ import {
 } from 'node:fs';
 import { join } from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
-import pg from 'pg';
+import { makeDatabase } from '../platform/db/makeDatabase';
 import { anyFreePort } from './freePort';
 import { commandOf, isAlive, ownFolder, postgresAccount, type Account } from './place';
 import { findPrograms } from './postgresPrograms';
@@ -142,35 +142,14 @@ async function startServer(
   server.once('exit', () => (ended = true));
   server.once('error', () => (ended = true));
   while (!ended && Date.now() < deadline) {
-    if (await answers(port, secrets.owner)) return server.pid;
+    if (await makeDatabase({ port, user: OWNER, password: secrets.owner, name: DATABASE })) {
+      return server.pid;
+    }
     await pause(LOOK_AGAIN);
   }
   if (!ended && server.pid !== undefined) await stopServer(server.pid);
   await pause(LOOK_AGAIN * 5);
   return undefined;
-}
-
-/** Whether the server takes the owner's sign-in; makes our database at the first time. */
-async function answers(port: number, password: string): Promise<boolean> {
-  const client = new pg.Client({
-    host: '127.0.0.1',
-    port,
-    user: OWNER,
-    password,
-    database: 'postgres',
-    connectionTimeoutMillis: 2_000,
-  });
-  client.on('error', () => undefined);
-  try {
-    await client.connect();
-    const there = await client.query('select from pg_database where datname = $1', [DATABASE]);
-    if (there.rowCount === 0) await client.query(`create database ${DATABASE}`);
-    return true;
-  } catch {
-    return false;
-  } finally {
-    await client.end().catch(() => undefined);
-  }
 }
 
 /** Fast shutdown (SIGINT): open transactions are rolled back, clients are disconnected. */

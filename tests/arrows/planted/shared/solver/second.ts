@@ -1,0 +1,3 @@
+import { first } from './first';
+
+export const second = (): unknown => first;
