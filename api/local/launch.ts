@@ -27,14 +27,6 @@ for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const) {
   process.on(signal, () => void stopAll().then(() => process.exit(0)));
 }
 
-try {
-  await launch();
-} catch (error) {
-  await stopAll();
-  process.stderr.write(`${(error as Error).message}\n`);
-  process.exit(1);
-}
-
 async function launch(): Promise<void> {
   if (process.env['DATABASE_URL']) await serveGiven();
   else await serveLocal();
@@ -117,4 +109,12 @@ function watch(api: ApiProcess): void {
     process.stderr.write(`The API ended by itself (${code ?? 'killed'}).\n`);
     void stopAll().then(() => process.exit(1));
   });
+}
+
+try {
+  await launch();
+} catch (error) {
+  await stopAll();
+  process.stderr.write(`${(error as Error).message}\n`);
+  process.exit(1);
 }
