@@ -42,15 +42,13 @@ export async function storeFixtures({ db }: AsOwner): Promise<Fixtures> {
       const [personId, sessionId, token] = [v7(), v7(), newToken()];
       const email = `${role}@${name}.example`;
       await db.insert(person).values({ organisationId, id: personId, role });
-      await db
-        .insert(personDetails)
-        .values({
-          organisationId,
-          personId,
-          name: `${role} of ${name}`,
-          email,
-          passwordHash: hash,
-        });
+      await db.insert(personDetails).values({
+        organisationId,
+        personId,
+        name: `${role} of ${name}`,
+        email,
+        passwordHash: hash,
+      });
       await db
         .insert(session)
         .values({ organisationId, id: sessionId, personId, startedAt: now, refreshedAt: now });

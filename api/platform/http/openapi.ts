@@ -3,9 +3,12 @@ import { problemSchema, type Route } from '@shared/contract';
 import { ACCESS_COOKIE } from './cookies';
 import { OUR_HEADER } from './crossSite';
 
+/** Described once, under this name. */
+const namedProblem = problemSchema.meta({ id: 'Problem' });
+
 const problem = (description: string) => ({
   description,
-  content: { 'application/problem+json': { schema: problemSchema.meta({ id: 'Problem' }) } },
+  content: { 'application/problem+json': { schema: namedProblem } },
 });
 
 /** Express' `:id` as OpenAPI's `{id}`. */
