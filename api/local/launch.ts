@@ -87,6 +87,9 @@ const PORT_ATTEMPTS = 3;
 /** Starts the API on PORT, or on the first free port from the usual one; answers the address. */
 async function serve(environment: Readonly<Record<string, string>>): Promise<string> {
   const wanted = process.env['PORT'];
+  if (wanted !== undefined && !/^[1-9]\d{0,4}$/.test(wanted)) {
+    throw new Error(`PORT is a number from 1 to 65535, not "${wanted}".`);
+  }
   if (wanted !== undefined && !(await isFree(Number(wanted)))) {
     throw new Error(`PORT ${wanted} is taken by another program: name another, or none.`);
   }
