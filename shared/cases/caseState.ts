@@ -1,7 +1,10 @@
 import type { Fault, LiftState } from '../circuit';
 import type { Advice, CautionCode, Danger, Observation, ReadingObservation } from '../diagnosis';
-import type { CaseEvent } from './event';
+import type { CaseEvent, StoredEvent } from './event';
 import type { OutcomeOfCase, PayloadOf } from './payloads';
+
+/** An event of this device, or of the server's log with what the server added. */
+export type FoldedEvent = CaseEvent & Partial<Pick<StoredEvent, 'actor' | 'receivedAt'>>;
 
 /** Where a case stands. `returned`: the supervisor asked a question, and the technician owes an answer. */
 export type CaseStatus = 'open' | 'closed' | 'returned' | 'accepted';
@@ -112,6 +115,8 @@ export interface CaseState {
   readonly undoable: readonly string[];
   /** Number of events folded. */
   readonly version: number;
+  /** Every event folded, withdrawn ones too, in order. */
+  readonly log: readonly FoldedEvent[];
 }
 
 /** Why an event is not taken. Sentences: `case.<code>` in the contract's table. */

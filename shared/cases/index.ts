@@ -26,6 +26,7 @@ export type {
   CaseRefusal,
   CaseState,
   CaseStatus,
+  FoldedEvent,
   ClosingNeed,
   DisturbedThing,
   PersonInShaft,
@@ -37,3 +38,9 @@ export type {
   StatedFinding,
   TemporaryLink,
 } from './caseState';
+export { applyEvent, foldCase, withdrawable } from './foldCase';
+export { closingNeeds, devicesToProve } from './closingNeeds';
+export { pointKey, pointsToReadAgain, readAgain } from './pointsToReadAgain';
+export { refusalOf, type Writer } from './refusalOf';
+export { riskOf, weaknessesOf, type EvidenceWeakness } from './weaknessesOf';
+export { observationsForEngine } from './observationsForEngine';
