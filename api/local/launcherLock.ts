@@ -14,7 +14,7 @@ export function runningLauncher(folder: string): Running | undefined {
   if (!existsSync(fileOf(folder))) return undefined;
   try {
     const running = JSON.parse(readFileSync(fileOf(folder), 'utf8')) as Running;
-    const ours = isAlive(running.pid) && commandOf(running.pid).includes('start.mjs');
+    const ours = isAlive(running.pid) && /start\.mjs|launch\.ts/.test(commandOf(running.pid));
     return ours && running.pid !== process.pid ? running : undefined;
   } catch {
     return undefined;

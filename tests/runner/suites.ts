@@ -45,7 +45,7 @@ export const sideBySide: readonly Suite[] = [
     ],
   },
   {
-    name: 'arrows',
+    name: 'imports',
     counts: 'check',
     commands: [[bin('depcruise'), 'client', 'api', 'shared', 'seeds', 'tests']],
   },

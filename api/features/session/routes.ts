@@ -52,7 +52,7 @@ export function sessionRoutes(
   mount(routes.signOut, async ({ request, response }) => {
     const claims = await tokens.read(request);
     const ended = await signOut(services, readCookie(request, REFRESH_COOKIE), claims);
-    if (ended) standing.forget(ended.sessionId);
+    if (ended) standing.forget(ended);
     clearCookie(response, ACCESS_COOKIE);
     clearCookie(response, REFRESH_COOKIE);
   });

@@ -17,26 +17,31 @@ export class Standing {
   constructor(private readonly services: Pick<Services, 'database' | 'clock'>) {}
 
   /** The role; undefined when this session may do nothing any more. */
-  async roleOf({ organisationId, personId, sessionId }: SessionKey): Promise<Role | undefined> {
+  async roleOf(key: SessionKey): Promise<Role | undefined> {
+    const { organisationId, personId, sessionId } = key;
     const now = this.services.clock().getTime();
-    const known = this.kept.get(sessionId);
+    const known = this.kept.get(nameOf(key));
     if (known && now - known.at < BELIEVED && now >= known.at) return known.role;
     const role = await this.services.database.inOrganisation(organisationId, personId, (org) =>
       standingOf(org, sessionId),
     );
-    this.keep(sessionId, role, now);
+    this.keep(nameOf(key), role, now);
     return role;
   }
 
   /** Called when a session ends here: this process knows at once. */
-  forget(sessionId: string): void {
-    this.kept.delete(sessionId);
+  forget(key: SessionKey): void {
+    this.kept.delete(nameOf(key));
   }
 
-  private keep(sessionId: string, role: Role | undefined, at: number): void {
-    this.kept.delete(sessionId);
-    this.kept.set(sessionId, { role, at });
+  private keep(name: string, role: Role | undefined, at: number): void {
+    this.kept.delete(name);
+    this.kept.set(name, { role, at });
     const oldest = this.kept.keys().next();
     if (this.kept.size > MOST_KEPT && !oldest.done) this.kept.delete(oldest.value);
   }
 }
+
+/** All three: an answer about one person's session says nothing about another person with it. */
+const nameOf = ({ organisationId, personId, sessionId }: SessionKey): string =>
+  `${organisationId} ${personId} ${sessionId}`;
