@@ -1,3 +1,4 @@
+import compression from 'compression';
 import express, { type Express, type Request } from 'express';
 import type { Route } from '@shared/contract';
 import { sessionRoutes } from './features/session/routes';
@@ -36,7 +37,7 @@ export function createApp(services: Services): Application {
   };
 
   app.use(giveRequestId(ids), logRequests(logger));
-  app.use('/api', apiHeaders, refuseCrossSite);
+  app.use('/api', apiHeaders, refuseCrossSite, compression());
   const { mount, mounted } = mounting({ app, services, callerOf });
   aboutRoutes(mount, services);
   sessionRoutes(mount, services, tokens, standing);

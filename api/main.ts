@@ -1,8 +1,8 @@
 import { createServer } from 'node:http';
-import pino from 'pino';
 import { v7 } from 'uuid';
 import { createApp } from './app';
 import { readConfig, type Config } from './config';
+import { createLogger } from './platform/logger';
 import { warmUp } from './platform/password';
 import { checkDatabase } from './platform/db/bootCheck';
 import { openDatabase } from './platform/db/doors';
@@ -22,7 +22,7 @@ const configuration = (): Config => {
 };
 
 const config = configuration();
-const logger = pino({ level: config.logLevel });
+const logger = createLogger(config.logLevel);
 
 const findings = await checkDatabase(config.databaseUrl);
 if (findings.length > 0) {

@@ -3,7 +3,7 @@ import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import pino from 'pino';
+import type { Logger } from 'pino';
 import supertest, { type Test } from 'supertest';
 import { v7 } from 'uuid';
 import { createApp } from '../../api/app';
@@ -11,6 +11,7 @@ import type { Config } from '../../api/config';
 import { asOwner, openDatabase, type AsOwner, type Database } from '../../api/platform/db/doors';
 import { accessTokens } from '../../api/platform/http/accessToken';
 import { ACCESS_COOKIE, REFRESH_COOKIE } from '../../api/platform/http/cookies';
+import { createLogger } from '../../api/platform/logger';
 import type { Services } from '../../api/platform/services';
 import type { Role, Route } from '../../shared/contract';
 import {
@@ -66,7 +67,9 @@ export interface TestServer {
 }
 
 /** The real application on a free port, over a database of its own with the fixtures in it. */
-export async function startTestServer(): Promise<TestServer> {
+export async function startTestServer(
+  logger: Logger = createLogger('silent'),
+): Promise<TestServer> {
   const fresh = await freshDatabase();
   const fixtures = await asOwner(fresh.ownerUrl, storeFixtures);
   const clientFolder = mkdtempSync(join(tmpdir(), 'lampline-client-'));
@@ -88,7 +91,7 @@ export async function startTestServer(): Promise<TestServer> {
     database,
     clock: () => new Date(Date.now() + ahead),
     ids: () => v7(),
-    logger: pino({ level: config.logLevel }),
+    logger,
   };
   const { app, mounted } = createApp(services);
   const server = createServer(app);

@@ -92,6 +92,16 @@ describe('POST /api/session/refresh', () => {
     expect(token(cookiesOf(one))).not.toBe(token(first));
   });
 
+  it('serves fifty tabs at once and signs none of them out', async () => {
+    const first = cookiesOf(await signIn('administrator@ours.example').expect(200));
+    const answers = await Promise.all(Array.from({ length: 50 }, () => refresh(first)));
+    expect(new Set(answers.map(({ status }) => status))).toEqual(new Set([200]));
+    const successors = new Set(
+      answers.map((answer) => /refresh=([^;]+)/.exec(cookiesOf(answer))?.[1]),
+    );
+    expect(successors.size).toBe(1);
+  });
+
   it('stores digests only', async () => {
     const cookie = cookiesOf(await signIn('administrator@ours.example').expect(200));
     const token = /__Secure-lampline-refresh=([^;]+)/.exec(cookie)?.[1] ?? '';

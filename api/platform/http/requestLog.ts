@@ -24,6 +24,8 @@ export const logRequests = (logger: Logger): RequestHandler =>
     genReqId: (request) => request.id,
     customLogLevel: (_request, response, error) =>
       error !== undefined || response.statusCode >= 500 ? 'error' : 'info',
+    // The translator has logged what happened; here only that it did.
+    customErrorObject: () => ({}),
     serializers: {
       req: (request: { id: unknown; method: string; url: string }) => ({
         id: request.id,
