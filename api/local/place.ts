@@ -26,19 +26,20 @@ export function postgresAccount(): Account | undefined {
   return { uid: Number(uid), gid: Number(gid) };
 }
 
-const nameOfClone = `lampline-${createHash('sha256').update(clone).digest('hex').slice(0, 12)}`;
+const nameOf = (folder: string) =>
+  `lampline-${createHash('sha256').update(folder).digest('hex').slice(0, 12)}`;
 /** As root the cluster can't be in the clone: PostgreSQL's account may not enter the folders above it. */
-const base = isRoot ? '/var/tmp' : join(clone, '.local');
+const baseOf = (folder: string) => (isRoot ? '/var/tmp' : join(folder, '.local'));
 
-/** Folder of this clone's lasting cluster, or of the throw-away one of process `pid`. */
-export function clusterFolder(use: 'demo' | { readonly test: number }): string {
-  const name = use === 'demo' ? nameOfClone : `${nameOfClone}-test-${use.test}`;
-  return join(base, name);
+/** Folder of a clone's lasting cluster, or of the throw-away one of process `pid`. */
+export function clusterFolder(use: 'demo' | { readonly test: number }, of = clone): string {
+  const name = use === 'demo' ? nameOf(of) : `${nameOf(of)}-test-${use.test}`;
+  return join(baseOf(of), name);
 }
 
 /** Folders of throw-away clusters whose process has ended without removing them. */
 export function abandonedFolders(): string[] {
-  const prefix = `${nameOfClone}-test-`;
+  const [base, prefix] = [baseOf(clone), `${nameOf(clone)}-test-`];
   let names: string[];
   try {
     names = readdirSync(base);
