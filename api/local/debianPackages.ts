@@ -54,11 +54,12 @@ export function bring(...wanted: readonly FromDebian[]): void {
 }
 
 function apt(words: readonly string[]): void {
-  const { status } = spawnSync('apt-get', ['-q', ...words], {
+  const { status, stderr } = spawnSync('apt-get', ['-q', ...words], {
     env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' },
-    stdio: ['ignore', 'ignore', 'inherit'],
+    stdio: ['ignore', 'ignore', 'pipe'],
+    encoding: 'utf8',
   });
-  if (status !== 0) throw new Error(`apt-get ${words.join(' ')} did not succeed.`);
+  if (status !== 0) throw new Error(`apt-get ${words.join(' ')} did not succeed:\n${stderr}`);
 }
 
 /** Debian's package makes and starts a cluster of its own; nobody asked for that one. */
