@@ -2,10 +2,9 @@ import type { ErrorRequestHandler, RequestHandler } from 'express';
 import { STATUS_CODES } from 'node:http';
 import type { Logger } from 'pino';
 import { ZodError } from 'zod';
-import type { Problem } from '@shared/contract';
+import { hasSentence, sentenceOf, type Problem } from '@shared/contract';
 import { requestId } from '../db/doors';
 import { Refusal, type RefusalCode } from '../refusal';
-import { sentence } from './sentence';
 
 const statuses: Readonly<Record<string, number>> = {
   not_found: 404,
@@ -63,12 +62,13 @@ export class InvalidRequest extends Refusal {
 /** The findings of zod, one per field, each with its sentence. */
 export function fieldsOf(error: ZodError): NonNullable<Problem['fields']> {
   return error.issues.map((issue) => {
-    const code = `field.${issue.code}`;
+    const named = `field.${issue.code}`;
+    const code = hasSentence(named) ? named : 'field.custom';
     const { code: _code, message: _message, path, ...details } = issue;
     return {
       field: path.map(String).join('.'),
       code,
-      detail: sentence(code, { ...details, path: path.map(String).join('.') }),
+      detail: sentenceOf(code, { ...details, path: path.map(String).join('.') }),
     };
   });
 }
@@ -107,7 +107,7 @@ export function problemOf(thrown: unknown): Problem {
     title: STATUS_CODES[status] ?? 'Error',
     status,
     code: refusal.code,
-    detail: sentence(refusal.code, details),
+    detail: sentenceOf(refusal.code, details),
     ...(Object.keys(details).length > 0 ? { details } : {}),
     ...(refusal instanceof InvalidRequest ? { fields: refusal.fields } : {}),
     requestId: requestId.getStore() ?? '',
