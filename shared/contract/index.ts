@@ -48,3 +48,12 @@ export {
 } from './sync';
 export { route, type Route } from './route';
 export { routes, type RouteName } from './routes';
+export { hasSentence, sentenceOf, sentences, useSentences } from './sentences/sentenceOf';
+export {
+  cautionSentences,
+  dangerSentence,
+  faultSentence,
+  modeWord,
+  reasonSentence,
+  refusalSentence,
+} from './sentences/engineWords';
