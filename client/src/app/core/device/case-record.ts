@@ -37,7 +37,9 @@ export function caseRecord(
   own: readonly OwnEvent[],
   actor: string,
 ): CaseRecord {
-  const waiting = own.filter(({ kept }) => kept !== 'refused').map(({ event }) => ({ ...event, actor }));
+  const waiting = own
+    .filter(({ kept }) => kept !== 'refused')
+    .map(({ event }) => ({ ...event, actor }));
   let latest = '';
   const entries = stored.map((event) => {
     const late = event.recordedAt < latest;

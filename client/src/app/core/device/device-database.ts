@@ -27,7 +27,10 @@ export class DeviceDatabase extends Dexie {
   readonly own!: EntityTable<OwnEvent, 'sequence'>;
   readonly log!: EntityTable<StoredEvent, 'position'>;
 
-  constructor(name: string, options: { indexedDB?: IDBFactory; IDBKeyRange?: typeof IDBKeyRange } = {}) {
+  constructor(
+    name: string,
+    options: { indexedDB?: IDBFactory; IDBKeyRange?: typeof IDBKeyRange } = {},
+  ) {
     // Strict: a transaction completes only when it is on the disk; *kept here* waits for that.
     super(name, { ...options, chromeTransactionDurability: 'strict' });
     this.version(1).stores({

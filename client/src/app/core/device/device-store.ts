@@ -223,7 +223,10 @@ export class DeviceStore {
     const [own, stored, pack] = await Promise.all([
       allOwn(database),
       caseIds
-        ? database.log.where('caseId').anyOf([...caseIds]).toArray()
+        ? database.log
+            .where('caseId')
+            .anyOf([...caseIds])
+            .toArray()
         : database.log.toArray(),
       database.value<KeptPack>('pack'),
     ]);

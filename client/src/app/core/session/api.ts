@@ -28,7 +28,10 @@ export class Api {
   private readonly http = inject(HttpClient);
   private readonly connection = inject(Connection);
 
-  async call<R extends Route>(route: R, options: CallOptions<R> = {}): Promise<Output<R['answer']>> {
+  async call<R extends Route>(
+    route: R,
+    options: CallOptions<R> = {},
+  ): Promise<Output<R['answer']>> {
     try {
       const response = await firstValueFrom(this.request(route, options).pipe(timeout(PATIENCE)));
       this.connection.answered();
@@ -80,4 +83,3 @@ export class Api {
     );
   }
 }
-
