@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { payloads, type EventType, type PayloadOf } from './payloads';
 
 /** Version of the payloads that this build writes. Older ones are upcast when read, never rewritten. */

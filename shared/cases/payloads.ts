@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { faultSchema, relayPositionSchema } from '../circuit';
 import {
   cautionCodeSchema,

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 
 /** Name of the node that stands for the mass of the building. It has no terminal and no probe reaches it as a tag. */
 export const EARTH = 'earth';

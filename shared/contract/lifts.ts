@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { circuitSchema, faultSchema } from '../circuit';
 import { idSchema, versionSchema } from './primitives';
 

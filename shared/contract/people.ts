@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { emailSchema, idSchema, roleSchema, versionSchema } from './primitives';
 
 export const personSchema = z.object({

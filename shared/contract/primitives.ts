@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 
 export const idSchema = z.uuid();
 /** Row version of an editable thing; sent back quoted as `If-Match`. */

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 
 /** RFC 9457 problem details. `code` is ours: the key of the sentence. `type` stays `about:blank`. */
 export const problemSchema = z.object({

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { caseDetailSchema, caseStatusSchema, caseSummarySchema, queueEntrySchema } from './cases';
 import {
   checkFindingSchema,

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { emailSchema, idSchema, roleSchema } from './primitives';
 
 export const signInSchema = z.object({ email: emailSchema, password: z.string().min(1).max(128) });

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { caseEventSchema, storedEventSchema } from '../cases';
 import { circuitRevisionSchema, liftSchema, siteSchema } from './lifts';
 import { idSchema } from './primitives';

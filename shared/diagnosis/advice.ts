@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { faultSchema } from '../circuit/circuit';
 import { meterFunctionSchema } from './observation';
 

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { relayPositionSchema } from '../circuit/circuit';
 
 /** What reads the volts. `lamp` answers bright, dim or none and never a number. */
