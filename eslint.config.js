@@ -62,7 +62,7 @@ export default tseslint.config(
     },
   },
   {
-    files: ['client/**/*.html'],
+    files: ['client/src/app/**/*.html'],
     extends: [...angular.configs.templateRecommended, ...angular.configs.templateAccessibility],
     rules: {
       '@angular-eslint/template/i18n': [
