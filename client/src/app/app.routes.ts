@@ -32,32 +32,32 @@ export const appRoutes: Routes = [
   {
     path: 'lifts',
     canActivate: [signedIn],
-    loadChildren: () => import('./features/lifts/routes'),
+    loadChildren: () => import('./features/lifts/routes').then((m) => m.liftRoutes),
   },
   {
     path: 'cases',
     canActivate: [signedIn],
-    loadChildren: () => import('./features/cases/routes'),
+    loadChildren: () => import('./features/cases/routes').then((m) => m.caseRoutes),
   },
   {
     path: 'review',
     canActivate: [signedIn, hasRole('supervisor')],
-    loadChildren: () => import('./features/review/routes'),
+    loadChildren: () => import('./features/review/routes').then((m) => m.reviewRoutes),
   },
   {
     path: 'people',
     canActivate: [signedIn, hasRole('supervisor', 'administrator')],
-    loadChildren: () => import('./features/people/routes'),
+    loadChildren: () => import('./features/people/routes').then((m) => m.peopleRoutes),
   },
   {
     path: 'circuits',
     canActivate: [signedIn, hasRole('engineer', 'administrator')],
-    loadChildren: () => import('./features/circuits/routes'),
+    loadChildren: () => import('./features/circuits/routes').then((m) => m.circuitRoutes),
   },
   {
     path: 'phone',
     canActivate: [signedIn],
-    loadChildren: () => import('./features/phone/routes'),
+    loadChildren: () => import('./features/phone/routes').then((m) => m.phoneRoutes),
   },
   {
     path: '**',

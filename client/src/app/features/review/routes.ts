@@ -1,3 +1,3 @@
 import type { Routes } from '@angular/router';
 
-export default [] satisfies Routes;
+export const reviewRoutes: Routes = [];
