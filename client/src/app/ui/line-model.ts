@@ -1,4 +1,4 @@
-import { stringTags, type Circuit, type LiftState } from '@shared/circuit';
+import { CONTROLLER, stringTags, type Circuit, type LiftState } from '@shared/circuit';
 import type { Advice, Observation, ReadingObservation } from '@shared/diagnosis';
 
 /** Of the string's volts: at least this is full, at most that is none (common practice). */
@@ -77,7 +77,7 @@ export function lampLine({
       value: reading ? Math.abs(reading.volts).toFixed(1) : '',
       stale: reading !== undefined && !sameState(reading.state, state),
       next: nextTags.includes(tag),
-      away: !(terminal?.places ?? []).some((place) => place === circuit.places[0]?.name),
+      away: !(terminal?.places ?? []).some((place) => place === CONTROLLER),
     };
   });
   return { lamps, sections: lamps.slice(1).map((_, k) => sectionAfter(k, lamps, advice)) };

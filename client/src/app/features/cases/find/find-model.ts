@@ -1,0 +1,64 @@
+import type { Circuit, LiftState } from '@shared/circuit';
+import type { CaseState } from '@shared/cases';
+import type { Advice, CautionCode, Suggestion } from '@shared/diagnosis';
+
+/** The two probes that the card shows: what the engine asks for, or what was chosen on the line. */
+export interface Probes {
+  readonly red: string;
+  readonly black: string;
+  readonly place: string;
+  readonly state: LiftState;
+  /** True: the reading that the engine asked for. */
+  readonly asked: boolean;
+}
+
+export function suggestionOf(advice: Advice | undefined): Suggestion | undefined {
+  if (advice?.step.kind === 'suggestion' || advice?.step.kind === 'contradiction') {
+    return advice.step.suggestion;
+  }
+  return undefined;
+}
+
+/** What the card shows. A tag chosen on the line wins over the suggestion; black rests on the return. */
+export function probesShown(
+  circuit: Circuit,
+  advice: Advice | undefined,
+  chosen: { readonly red: string; readonly black: string } | undefined,
+  here: { readonly place: string; readonly state: LiftState },
+): Probes | undefined {
+  if (chosen) return { ...chosen, ...here, asked: false };
+  const suggestion = suggestionOf(advice);
+  if (suggestion?.kind !== 'reading' || !suggestion.red || !suggestion.black) return undefined;
+  const { red, black, place, state } = suggestion;
+  return { red, black, place, state, asked: true };
+}
+
+/** A touch on a lamp: red goes there; on the return, black goes back to it. */
+export function chosenProbes(
+  circuit: Circuit,
+  tag: string,
+): { readonly red: string; readonly black: string } {
+  const line = circuit.strings[0]!;
+  return tag === line.return
+    ? { red: line.return, black: line.supplyReturn }
+    : { red: tag, black: line.return };
+}
+
+/** Cautions that were not acknowledged at this place during this visit. */
+export function cautionsDue(
+  state: CaseState,
+  codes: readonly CautionCode[],
+  place: string,
+): readonly CautionCode[] {
+  return codes.filter(
+    (code) =>
+      !state.acknowledged.some((known) => known.code === code && known.place === place),
+  );
+}
+
+/** Values of conditions that the reading needs and that are not so now, as `name: value`. */
+export function statesToSet(wanted: LiftState, now: LiftState): readonly string[] {
+  return Object.keys(wanted)
+    .filter((name) => now[name] !== undefined && wanted[name] !== now[name])
+    .map((name) => `${name}: ${wanted[name]}`);
+}

@@ -1,0 +1,207 @@
+import { ChangeDetectionStrategy, Component, computed, effect, inject, signal } from '@angular/core';
+import { RouterLink } from '@angular/router';
+import type { LiftState, RelayPosition } from '@shared/circuit';
+import { cautionSentences, dangerSentence, faultSentence, reasonSentence } from '@shared/contract';
+import { USUAL_METER, type CautionCode } from '@shared/diagnosis';
+import { lampLine } from '../../../ui/line-model';
+import { LineOfLamps } from '../../../ui/line-of-lamps';
+import { ReadingPad, type PadReading } from '../../../ui/reading-pad';
+import { RelayLook } from '../../../ui/relay-look';
+import { CaseDesk } from '../case-desk';
+import { cautionsDue, chosenProbes, probesShown, statesToSet, suggestionOf } from './find-model';
+import { OutcomeRows } from './outcome-rows';
+import { ProbeCards } from './probe-cards';
+import { StopSign } from './stop-sign';
+import { SuspectList } from './suspect-list';
+import { Surroundings } from './surroundings';
+
+/** The next reading: where the probes go, why, what each outcome would mean, and the pad. */
+@Component({
+  selector: 'app-find',
+  imports: [
+    LineOfLamps,
+    OutcomeRows,
+    ProbeCards,
+    ReadingPad,
+    RelayLook,
+    RouterLink,
+    StopSign,
+    Surroundings,
+    SuspectList,
+  ],
+  templateUrl: './find.html',
+  styleUrl: './find.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class Find {
+  protected readonly desk = inject(CaseDesk);
+  private readonly chosen = signal<{ red: string; black: string } | undefined>(undefined);
+
+  protected readonly text = signal('');
+  protected readonly busy = signal(false);
+  protected readonly fromPractice = signal(false);
+  protected readonly suspectsOpen = signal(false);
+
+  protected readonly advice = this.desk.advice;
+  protected readonly step = computed(() => this.advice()?.step);
+  protected readonly suggestion = computed(() => suggestionOf(this.advice()));
+  protected readonly circuit = computed(() => this.desk.circuit()!);
+  protected readonly direct = computed(() => this.circuit().stringCurrent === 'direct');
+  protected readonly here = computed(() => ({
+    place: this.desk.place(),
+    state: this.desk.liftState(),
+  }));
+  protected readonly probes = computed(() =>
+    probesShown(this.circuit(), this.advice(), this.chosen(), this.here()),
+  );
+  protected readonly line = computed(() =>
+    lampLine({
+      circuit: this.circuit(),
+      observations: (this.desk.state()?.seen ?? []).map(({ observation }) => observation),
+      state: this.desk.liftState(),
+      advice: this.advice(),
+      provenDead: this.desk.state()?.isolated?.provenDead,
+    }),
+  );
+  protected readonly due = computed(() => {
+    const state = this.desk.state();
+    const suggestion = this.suggestion();
+    if (!state || !suggestion || !this.probes()?.asked) return [];
+    return cautionsDue(state, suggestion.cautions, suggestion.place);
+  });
+  protected readonly toSet = computed(() => {
+    const probes = this.probes();
+    return probes ? statesToSet(probes.state, this.desk.liftState()) : [];
+  });
+  protected readonly why = computed(() => (this.suggestion()?.because ?? []).map(reasonSentence));
+  protected readonly canUndo = computed(() => (this.desk.state()?.undoable.length ?? 0) > 0);
+
+  protected readonly cautionSentences = cautionSentences;
+  protected readonly dangerSentence = dangerSentence;
+  protected readonly faultSentence = faultSentence;
+
+  constructor() {
+    effect(() => {
+      if (this.advice()) void this.desk.shown();
+    });
+    effect(() => {
+      const step = this.step();
+      if (step?.kind === 'stop') void this.raise(step.dangers);
+    });
+  }
+
+  private async raise(
+    dangers: Extract<NonNullable<ReturnType<Find['step']>>, { kind: 'stop' }>['dangers'],
+  ): Promise<void> {
+    for (const danger of dangers) {
+      const known = this.desk
+        .state()
+        ?.dangers.some(({ code, part }) => code === danger.code && part === danger.part);
+      if (!known) await this.desk.add('danger raised', { danger });
+    }
+  }
+
+  protected choose(tag: string): void {
+    this.chosen.set(chosenProbes(this.circuit(), tag));
+  }
+
+  /** Back to what the engine asks for. */
+  protected backToSuggestion(): void {
+    this.chosen.set(undefined);
+  }
+
+  protected swap(): void {
+    const probes = this.probes();
+    if (probes) this.chosen.set({ red: probes.black, black: probes.red });
+  }
+
+  protected async understood(): Promise<void> {
+    const suggestion = this.suggestion();
+    if (!suggestion) return;
+    const codes: CautionCode[] = [...this.due()];
+    await this.desk.add('caution acknowledged', { codes, place: suggestion.place });
+  }
+
+  protected async save({ volts, entered }: PadReading): Promise<void> {
+    const probes = this.probes();
+    if (!probes || this.busy()) return;
+    this.busy.set(true);
+    const kept = await this.desk.add(
+      'reading taken',
+      {
+        red: probes.red,
+        black: probes.black,
+        function: this.direct() ? 'dc volts' : 'ac volts',
+        volts,
+        meter: USUAL_METER,
+        place: probes.asked ? probes.place : this.desk.place(),
+        entered: this.fromPractice() ? 'practice' : entered,
+        ...(probes.asked ? { answers: this.desk.answering() } : {}),
+      },
+      probes.state,
+    );
+    this.busy.set(false);
+    if (!kept) return;
+    this.text.set('');
+    this.fromPractice.set(false);
+    this.chosen.set(undefined);
+  }
+
+  protected async readIt(): Promise<void> {
+    const probes = this.probes();
+    if (!probes) return;
+    if (this.toSet().length > 0) await this.setState(probes.state);
+    const volts = await this.desk.practiceVolts(probes.red, probes.black, USUAL_METER.ohms);
+    this.text.set(volts.toFixed(1));
+    this.fromPractice.set(true);
+  }
+
+  protected typed(text: string): void {
+    this.text.set(text);
+    this.fromPractice.set(false);
+  }
+
+  protected async setState(state: LiftState): Promise<void> {
+    await this.desk.add('state changed', {}, state);
+  }
+
+  protected async stand(place: string): Promise<void> {
+    await this.desk.add('place changed', { place });
+  }
+
+  protected async look(relay: string, position: RelayPosition): Promise<void> {
+    await this.desk.add('relay seen', { relay, position, answers: this.desk.answering() });
+  }
+
+  protected async lookInPractice(relay: string): Promise<void> {
+    const position = (await this.desk.practiceRelays())[relay];
+    if (position) await this.look(relay, position);
+  }
+
+  protected async cannotReach(): Promise<void> {
+    const probes = this.probes();
+    const suggestion = this.suggestion();
+    const line = this.circuit().strings[0]!;
+    const ends = probes ? [probes.red, probes.black] : [suggestion?.relay ?? ''];
+    // The return is black's home: what can't be reached is the other end.
+    const what = ends.find((tag) => tag !== line.return && tag !== line.supplyReturn) ?? ends[0];
+    if (what) await this.desk.add('could not reach', { what });
+    this.chosen.set(undefined);
+  }
+
+  protected async notSure(): Promise<void> {
+    const suggestion = this.suggestion();
+    if (suggestion?.kind !== 'reading') return;
+    const { red, black } = suggestion;
+    await this.desk.add('suggestion declined', {
+      key: `${red} ${black} ${suggestion.function}`,
+      answers: this.desk.answering(),
+    });
+    this.text.set('');
+  }
+
+  protected async undo(): Promise<void> {
+    const last = this.desk.state()?.undoable.at(-1);
+    if (last) await this.desk.add('event withdrawn', { of: last });
+  }
+}
