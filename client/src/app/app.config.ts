@@ -7,14 +7,21 @@ import {
   provideZonelessChangeDetection,
   type ApplicationConfig,
 } from '@angular/core';
-import { provideRouter, withComponentInputBinding, withInMemoryScrolling } from '@angular/router';
+import {
+  provideRouter,
+  TitleStrategy,
+  withComponentInputBinding,
+  withInMemoryScrolling,
+} from '@angular/router';
 import { provideServiceWorker } from '@angular/service-worker';
 import { appRoutes } from './app.routes';
 import { DeviceStore } from './core/device/device-store';
 import { EnginePort } from './core/engine/engine-port';
 import { WorkerEngine } from './core/engine/worker-engine';
+import { markInterceptor } from './core/session/mark-interceptor';
 import { refreshInterceptor } from './core/session/refresh-interceptor';
 import { SessionStore } from './core/session/session-store';
+import { PageTitle } from './core/shell/page-title';
 
 /** Opens what this phone holds before the first screen; the network is not asked. */
 async function openPhone(): Promise<void> {
@@ -29,7 +36,7 @@ export const appConfig: ApplicationConfig = {
   providers: [
     provideZonelessChangeDetection(),
     provideBrowserGlobalErrorListeners(),
-    provideHttpClient(withFetch(), withInterceptors([refreshInterceptor])),
+    provideHttpClient(withFetch(), withInterceptors([refreshInterceptor, markInterceptor])),
     provideRouter(
       appRoutes,
       withComponentInputBinding(),
@@ -39,6 +46,7 @@ export const appConfig: ApplicationConfig = {
       enabled: !isDevMode(),
       registrationStrategy: 'registerImmediately',
     }),
+    { provide: TitleStrategy, useClass: PageTitle },
     { provide: EnginePort, useClass: WorkerEngine },
     provideAppInitializer(openPhone),
   ],

@@ -40,10 +40,11 @@ export function caseRecord(
   const waiting = own
     .filter(({ kept }) => kept !== 'refused')
     .map(({ event }) => ({ ...event, actor }));
-  let latest = '';
+  let latest: StoredEvent | undefined;
   const entries = stored.map((event) => {
-    const late = event.recordedAt < latest;
-    if (!late) latest = event.recordedAt;
+    const earlier = latest !== undefined && event.recordedAt < latest.recordedAt;
+    const late = earlier && event.device !== latest?.device;
+    if (!earlier) latest = event;
     return ofStored(event, late);
   });
   return {

@@ -35,7 +35,7 @@ export class DeviceDatabase extends Dexie {
     super(name, { ...options, chromeTransactionDurability: 'strict' });
     this.version(1).stores({
       values: 'name',
-      own: 'sequence, caseId, kept',
+      own: 'sequence, caseId, kept, event.id',
       log: 'position, caseId, id',
     });
   }

@@ -9,20 +9,17 @@ import {
   type StoredEvent,
 } from '@shared/cases';
 import type { Circuit, LiftState } from '@shared/circuit';
-import type { Lift, Pack, Session, Site } from '@shared/contract';
+import type { Lift, Session, Site } from '@shared/contract';
 import { Subject } from 'rxjs';
 import type { AppendResult, CaseJournal } from './case-journal';
 import { caseRecord, withOwn, type CaseRecord } from './case-record';
+import { CLIENT_BUILD } from './client-build';
 import { CLOCK } from './clock';
 import { OPEN_DATABASE, type DeviceDatabase, type OwnEvent } from './device-database';
 import { NEW_ID } from './ids';
+import { circuitKey, circuitsOf, withSameCircuits, type KeptPack } from './kept-pack';
 import { allOwn, appendOwn, deviceId } from './outbox-database';
-
-/** The pieces of the pack that are kept as one value each. */
-export interface KeptPack extends Omit<Pack, 'events' | 'position'> {
-  /** When it was fetched, ISO 8601. */
-  readonly fetchedAt: string;
-}
+import { TAB_CHANNEL } from './tab-channel';
 
 export type StoreStatus = 'closed' | 'opening' | 'ready' | 'unusable';
 
@@ -37,19 +34,15 @@ export class DeviceStore {
   private readonly records = signal<ReadonlyMap<string, CaseRecord>>(new Map());
   private readonly ownEvents = signal<readonly OwnEvent[]>([]);
   private readonly currentStatus = signal<StoreStatus>('closed');
-  private readonly circuits = computed(() => {
-    const byKey = new Map<string, Circuit>();
-    for (const { circuitId, revision, circuit } of this.pack()?.circuits ?? []) {
-      byKey.set(`${circuitId} ${revision}`, circuit);
-    }
-    return byKey;
-  });
+  private readonly contact = signal<number | undefined>(undefined);
+  private readonly circuits = computed(() => circuitsOf(this.pack()));
   private session?: Session;
   private device = '';
   private database?: DeviceDatabase;
-  private writing: Promise<unknown> = Promise.resolve();
-  private readonly otherTabs =
-    typeof BroadcastChannel === 'undefined' ? undefined : new BroadcastChannel('lampline');
+  private opening?: Promise<void>;
+  /** Appends and reads of the store run one after the other: a read never overlooks an append. */
+  private queue: Promise<unknown> = Promise.resolve();
+  private readonly otherTabs = inject(TAB_CHANNEL);
 
   /** An event was kept here; the sender wakes up. */
   readonly appended = new Subject<void>();
@@ -59,6 +52,11 @@ export class DeviceStore {
   /** Names of persons by id. */
   readonly names = computed(() => this.pack()?.names ?? {});
   readonly packOf = this.pack.asReadonly();
+  /** When the server last answered all that was asked, milliseconds since 1970. */
+  readonly lastContact = this.contact.asReadonly();
+  readonly ready = computed(() => this.currentStatus() === 'ready');
+  /** The server takes only newer builds of this client; what is kept here is still sent. */
+  readonly tooOld = computed(() => (this.pack()?.oldestClient ?? 0) > CLIENT_BUILD);
   readonly cases: Signal<readonly CaseState[]> = computed(() =>
     [...this.records().values()]
       .flatMap(({ state }) => (state ? [state] : []))
@@ -69,22 +67,37 @@ export class DeviceStore {
   readonly refused = computed(() => this.ownEvents().filter(({ kept }) => kept === 'refused'));
 
   constructor() {
-    if (this.otherTabs) this.otherTabs.onmessage = () => void this.reload();
+    this.otherTabs.listen((caseIds) => void this.reload(caseIds));
   }
 
   /** Opens the store of a person and reads what it holds. Never throws: see {@link status}. */
-  async open(session: Session): Promise<void> {
-    if (this.session?.person.id === session.person.id && this.currentStatus() === 'ready') return;
-    this.currentStatus.set('opening');
-    this.session = session;
-    this.database = this.openDatabase(session.person.id);
-    if (!(await this.database.works())) {
-      this.currentStatus.set('unusable');
-      return;
+  open(session: Session): Promise<void> {
+    if (this.session?.person.id === session.person.id && this.opening) {
+      this.session = session;
+      return this.opening;
     }
-    this.device = await deviceId(this.database, this.newId);
-    await this.reload();
-    this.currentStatus.set('ready');
+    this.close();
+    this.session = session;
+    this.opening = this.openNow(session);
+    return this.opening;
+  }
+
+  private async openNow(session: Session): Promise<void> {
+    this.currentStatus.set('opening');
+    const database = this.openDatabase(session.person.id);
+    this.database = database;
+    let status: StoreStatus = 'unusable';
+    try {
+      if (await database.works()) {
+        this.device = await deviceId(database, this.newId);
+        this.contact.set(await database.value<number>(LAST_CONTACT));
+        await this.reload();
+        status = 'ready';
+      }
+    } catch {
+      // This window can't keep anything: the frame says so.
+    }
+    if (this.database === database) this.currentStatus.set(status);
   }
 
   /** Forgets what is in memory; the database stays as it is. */
@@ -92,6 +105,8 @@ export class DeviceStore {
     this.database?.close();
     this.database = undefined;
     this.session = undefined;
+    this.opening = undefined;
+    this.contact.set(undefined);
     this.pack.set(undefined);
     this.records.set(new Map());
     this.ownEvents.set([]);
@@ -108,7 +123,7 @@ export class DeviceStore {
 
   /** The same object for the same revision for as long as the pack stays: engines are kept by it. */
   circuit(id: string | null, revision: number | null): Circuit | undefined {
-    return this.circuits().get(`${id} ${revision}`);
+    return this.circuits().get(circuitKey(id, revision));
   }
 
   nameOf(personId: string | undefined): string {
@@ -118,9 +133,15 @@ export class DeviceStore {
   }
 
   /** For the sender; undefined while no store is open. */
-  sending(): { readonly database: DeviceDatabase; readonly device: string } | undefined {
-    return this.database && this.currentStatus() === 'ready'
-      ? { database: this.database, device: this.device }
+  sending():
+    | {
+        readonly database: DeviceDatabase;
+        readonly device: string;
+        readonly personId: string;
+      }
+    | undefined {
+    return this.database && this.session && this.currentStatus() === 'ready'
+      ? { database: this.database, device: this.device, personId: this.session.person.id }
       : undefined;
   }
 
@@ -137,7 +158,7 @@ export class DeviceStore {
   /** Opens a case on a lift; the id is made here. */
   async openCase(
     payload: PayloadOf<'case opened'>,
-    state: LiftState,
+    state: LiftState = {},
   ): Promise<AppendResult & { readonly caseId: string }> {
     const caseId = this.newId();
     return { ...(await this.append(caseId, 'case opened', payload, state)), caseId };
@@ -150,8 +171,12 @@ export class DeviceStore {
     payload: PayloadOf<T>,
     state?: LiftState,
   ): Promise<AppendResult> {
-    const result = this.writing.then(() => this.appendNow(caseId, type, payload, state));
-    this.writing = result;
+    return this.inTurn(() => this.appendNow(caseId, type, payload, state));
+  }
+
+  private inTurn<T>(work: () => Promise<T>): Promise<T> {
+    const result = this.queue.then(work);
+    this.queue = result.catch(() => undefined);
     return result;
   }
 
@@ -179,7 +204,7 @@ export class DeviceStore {
     try {
       const event = await this.kept(unnumbered);
       this.take({ sequence: event.sequence, caseId, kept: 'kept here', event });
-      this.otherTabs?.postMessage(caseId);
+      this.otherTabs.post([caseId]);
       this.appended.next();
       return { kind: 'kept here', id: event.id };
     } catch (error) {
@@ -212,12 +237,30 @@ export class DeviceStore {
 
   /** Keeps the pack's pieces; its events go through the log. */
   async keepPack(pack: KeptPack): Promise<void> {
-    await this.database?.values.put({ name: 'pack', value: pack });
-    this.pack.set(pack);
+    const kept = withSameCircuits(this.pack(), pack);
+    await this.database?.values.put({ name: 'pack', value: kept });
+    this.pack.set(kept);
+  }
+
+  /** The server answered all that was asked, at this time (milliseconds since 1970). */
+  async keepContact(at: number): Promise<void> {
+    this.contact.set(at);
+    await this.database?.values.put({ name: LAST_CONTACT, value: at });
+  }
+
+  /** After this tab changed the queue or the log: reads the cases again and tells the other tabs. */
+  async changed(caseIds: readonly string[]): Promise<void> {
+    if (caseIds.length === 0) return;
+    await this.reload(caseIds);
+    this.otherTabs.post(caseIds);
   }
 
   /** Reads cases again after the log or the queue changed: those named, or all. */
-  async reload(caseIds?: readonly string[]): Promise<void> {
+  reload(caseIds?: readonly string[]): Promise<void> {
+    return this.inTurn(() => this.reloadNow(caseIds));
+  }
+
+  private async reloadNow(caseIds?: readonly string[]): Promise<void> {
     const { database } = this;
     if (!database) return;
     const [own, stored, pack] = await Promise.all([
@@ -230,6 +273,8 @@ export class DeviceStore {
         : database.log.toArray(),
       database.value<KeptPack>('pack'),
     ]);
+    // Another person's store was opened meanwhile: these are not theirs.
+    if (database !== this.database) return;
     const touched = new Set(caseIds ?? [...own, ...stored].map(({ caseId }) => caseId));
     const records = new Map(caseIds ? this.records() : []);
     for (const caseId of touched) {
@@ -243,9 +288,12 @@ export class DeviceStore {
     }
     this.ownEvents.set(own);
     this.records.set(records);
-    // Another object for the same revision would make every engine anew.
-    if (pack && pack.fetchedAt !== this.pack()?.fetchedAt) this.pack.set(pack);
+    if (pack && pack.fetchedAt !== this.pack()?.fetchedAt) {
+      this.pack.set(withSameCircuits(this.pack(), pack));
+    }
   }
 }
 
+/** Name of the value that holds when the server last answered all. */
+const LAST_CONTACT = 'last contact';
 const byCaseVersion = (a: StoredEvent, b: StoredEvent): number => a.caseVersion - b.caseVersion;

@@ -27,6 +27,9 @@ export function appendOwn(
   event: Omit<CaseEvent, 'sequence'>,
 ): Promise<CaseEvent> {
   return database.transaction('rw', database.values, database.own, async () => {
+    // A second try after a broken connection: the first one may have got through.
+    const before = await database.own.where('event.id').equals(event.id).first();
+    if (before) return before.event;
     const sequence = (await database.value<number>(NEXT_SEQUENCE)) ?? 1;
     const numbered: CaseEvent = { ...event, sequence };
     await database.own.add({ sequence, caseId: event.caseId, kept: 'kept here', event: numbered });

@@ -5,14 +5,20 @@ import type { OwnEvent } from './device-database';
 /** Largest batch as JSON, bytes: under the server's limit for one request. */
 export const MOST_BATCH_BYTES = 512 * 1024;
 
-/** The next events to send, in the device's order, cut at the batch's limits. */
-export function nextBatch(waiting: readonly OwnEvent[]): readonly CaseEvent[] {
+/**
+ * The next events to send, in the device's order, cut at the batch's limits; at least one, if any.
+ * @param most events; fewer after the server found a batch too large
+ */
+export function nextBatch(
+  waiting: readonly OwnEvent[],
+  most = MOST_EVENTS_IN_BATCH,
+): readonly CaseEvent[] {
   const batch: CaseEvent[] = [];
   let bytes = 0;
   for (const { event, kept } of [...waiting].sort((a, b) => a.sequence - b.sequence)) {
     if (kept !== 'kept here') continue;
     bytes += JSON.stringify(event).length;
-    if (batch.length > 0 && (batch.length === MOST_EVENTS_IN_BATCH || bytes > MOST_BATCH_BYTES)) {
+    if (batch.length > 0 && (batch.length >= most || bytes > MOST_BATCH_BYTES)) {
       break;
     }
     batch.push(event);

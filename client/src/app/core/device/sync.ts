@@ -1,6 +1,6 @@
 import { Injectable, computed, inject, signal } from '@angular/core';
-import { routes } from '@shared/contract';
-import { EMPTY, Subject, defer, exhaustMap, fromEvent, merge, switchMap, timer } from 'rxjs';
+import { MOST_EVENTS_IN_BATCH, routes } from '@shared/contract';
+import { Subject, exhaustMap, filter, fromEvent, merge, switchMap, timer } from 'rxjs';
 import { Api } from '../session/api';
 import { ApiError } from '../session/api-error';
 import { SessionStore } from '../session/session-store';
@@ -8,7 +8,7 @@ import { CLOCK } from './clock';
 import { DeviceStore } from './device-store';
 import { takeResults, takeStored, waitingEvents } from './outbox-database';
 import { nextBatch } from './outbox-order';
-import { waitAfter, type SendFailure } from './outbox-policy';
+import { believed, failureOf, waitAfter, type SendFailure } from './outbox-policy';
 import { CHANCE, SEND_LOCK } from './send-lock';
 
 /** Look for others' events this often while a screen is open, milliseconds. */
@@ -17,6 +17,8 @@ const FEED_EVERY = 30_000;
 const PACK_AGE = 10 * 60_000;
 /** Events asked for at once. */
 const FEED_LIMIT = 200;
+/** Readings that follow each other closely go in one batch, milliseconds. */
+const SETTLE = 50;
 
 export type SyncState =
   | { readonly kind: 'idle' }
@@ -34,109 +36,123 @@ export class Sync {
   private readonly lock = inject(SEND_LOCK);
 
   private readonly state = signal<SyncState>({ kind: 'idle' });
-  private readonly contact = signal<number | undefined>(undefined);
-  private readonly kicks = new Subject<number>();
+  private readonly retries = new Subject<number>();
   private failures = 0;
+  private most = MOST_EVENTS_IN_BATCH;
+  /** The server asked for quiet until then, milliseconds since 1970. */
+  private quietUntil = 0;
+  private running?: Promise<void>;
 
   readonly status = this.state.asReadonly();
   readonly waiting = computed(() => this.store.waiting().length);
-  /** When the server last answered, milliseconds since 1970. */
-  readonly lastContact = this.contact.asReadonly();
+  /** Events that the server refused, with reason and data. */
+  readonly quarantine = this.store.refused;
+  readonly lastContact = this.store.lastContact;
 
   constructor() {
     merge(
-      this.store.appended.pipe(switchMap(() => timer(50))),
+      this.store.appended.pipe(switchMap(() => timer(SETTLE))),
       fromEvent(window, 'online'),
-      fromEvent(document, 'visibilitychange'),
+      fromEvent(document, 'visibilitychange').pipe(filter(() => !document.hidden)),
       timer(FEED_EVERY, FEED_EVERY),
-      this.kicks.pipe(switchMap((wait) => timer(wait))),
+      this.retries.pipe(switchMap((wait) => timer(wait))),
     )
-      .pipe(exhaustMap(() => (this.store.sending() ? defer(() => this.syncNow()) : EMPTY)))
+      .pipe(exhaustMap(() => this.syncNow()))
       .subscribe();
   }
 
   /** One round under the lock. Never throws; a failure is in {@link status} and is tried again later. */
-  async syncNow(): Promise<void> {
-    await this.lock(async () => {
-      this.state.set({ kind: 'working' });
-      try {
-        if (!(await this.sessions.fresh(this.clock.now())) && this.sessions.signInToSend()) {
-          throw new ApiError(401, 'not_signed_in', '');
-        }
-        await this.refreshPack();
-        await this.sendAll();
-        await this.pullFeed();
-        this.failures = 0;
-        this.contact.set(this.clock.now());
-        this.state.set({ kind: 'idle' });
-      } catch (error) {
-        this.failed(error);
-      }
-    });
+  syncNow(): Promise<void> {
+    this.running ??= this.lock(() => this.round()).finally(() => (this.running = undefined));
+    return this.running;
   }
 
-  private failed(error: unknown): void {
-    const why: SendFailure =
-      error instanceof ApiError && error.status === 401
-        ? { kind: 'signed out' }
-        : error instanceof ApiError && error.status !== 0
-          ? {
-              kind: 'answered',
-              status: error.status,
-              retryAfterSeconds: error.retryAfterSeconds,
-            }
-          : { kind: 'unreachable' };
+  private async round(): Promise<void> {
+    if (!this.store.sending() || this.clock.now() < this.quietUntil) return;
+    this.state.set({ kind: 'working' });
+    try {
+      const fresh = await this.sessions.fresh(this.clock.now());
+      if (!fresh && this.sessions.signInToSend()) throw new ApiError(401, 'not_signed_in', '');
+      await this.sendAll();
+      await this.refreshPack();
+      await this.pullFeed();
+      this.failures = 0;
+      await this.store.keepContact(this.clock.now());
+      this.state.set({ kind: 'idle' });
+      // What was kept while this round ran has not woken another one.
+      if (this.waiting() > 0) this.retries.next(SETTLE);
+    } catch (error) {
+      this.failed(failureOf(error));
+    }
+  }
+
+  private failed(why: SendFailure): void {
     this.failures += 1;
     this.state.set({ kind: 'waiting', why });
+    this.quietUntil = this.clock.now() + believed(why);
     const wait = waitAfter(why, this.failures, this.chance());
-    if (wait !== undefined) this.kicks.next(wait);
+    if (wait !== undefined) this.retries.next(wait);
+  }
+
+  /** The open store, if it is of the person whose cookies the browser sends. */
+  private ofPerson(): ReturnType<DeviceStore['sending']> {
+    const sending = this.store.sending();
+    return sending?.personId === this.sessions.session()?.person.id ? sending : undefined;
   }
 
   private async sendAll(): Promise<void> {
-    const sending = this.store.sending();
-    if (!sending) return;
-    const { database, device } = sending;
     for (;;) {
-      const batch = nextBatch(await waitingEvents(database));
+      const sending = this.ofPerson();
+      if (!sending) return;
+      const { database, device } = sending;
+      const batch = nextBatch(await waitingEvents(database), this.most);
       if (batch.length === 0) return;
-      const { results } = await this.api.call(routes.sendEvents, {
-        body: { device, events: [...batch] },
-      });
+      const { results } = await this.sent(device, batch);
       const changed = await takeResults(database, batch, results);
-      await this.store.reload(changed);
+      await this.store.changed(changed);
       // Events that must be tried again would be the same batch at once: they wait for the next round.
       if (changed.length === 0) throw new ApiError(503, 'retry', '');
     }
   }
 
+  private async sent(device: string, batch: ReturnType<typeof nextBatch>) {
+    try {
+      return await this.api.call(routes.sendEvents, { body: { device, events: [...batch] } });
+    } catch (error) {
+      // Too large for something on the way: the next try takes half.
+      if (failureOf(error).kind === 'too large') this.most = Math.max(1, batch.length >> 1);
+      throw error;
+    }
+  }
+
   private async pullFeed(): Promise<void> {
-    const sending = this.store.sending();
-    if (!sending) return;
-    const { database } = sending;
     for (;;) {
+      const sending = this.ofPerson();
+      if (!sending) return;
+      const { database } = sending;
       const after = (await database.value<number>('position')) ?? 0;
       const { events, position, more } = await this.api.call(routes.feed, {
         query: { after, limit: FEED_LIMIT },
       });
       if (events.length > 0) {
-        await this.store.reload(await takeStored(database, events, position));
+        await this.store.changed(await takeStored(database, events, position));
       }
       if (!more) return;
     }
   }
 
   /** Fetches the pack where there is none, or where it is old. */
-  async refreshPack(force = false): Promise<void> {
-    const sending = this.store.sending();
+  private async refreshPack(): Promise<void> {
+    const sending = this.ofPerson();
     const kept = this.store.packOf();
     const age = kept ? this.clock.now() - Date.parse(kept.fetchedAt) : Infinity;
-    if (!sending || (!force && age < PACK_AGE)) return;
+    if (!sending || age < PACK_AGE) return;
     const { events, position, ...pack } = await this.api.call(routes.pack);
     const { database } = sending;
     const known = await database.value<number>('position');
     // The pack holds only some cases: a cursor that exists already must not jump over what it left out.
     const changed = await takeStored(database, events, known === undefined ? position : undefined);
     await this.store.keepPack({ ...pack, fetchedAt: new Date(this.clock.now()).toISOString() });
-    await this.store.reload(changed);
+    await this.store.changed(changed);
   }
 }

@@ -45,7 +45,7 @@ export class Api {
     const path = route.path.replace(/:(\w+)/g, (_, name: string) =>
       encodeURIComponent(String(options.params?.[name] ?? '')),
     );
-    let headers = new HttpHeaders({ 'X-Lampline': '1' });
+    let headers = new HttpHeaders();
     if (options.version !== undefined) headers = headers.set('If-Match', `"${options.version}"`);
     if (options.key !== undefined) headers = headers.set('Idempotency-Key', options.key);
     return this.http.request<unknown>(route.method.toUpperCase(), path, {

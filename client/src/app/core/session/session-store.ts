@@ -24,6 +24,9 @@ export class SessionStore {
   readonly signInToSend = this.ended.asReadonly();
   readonly role = computed<Role | undefined>(() => this.current()?.person.role);
 
+  /** Whom this phone is open for although their sign-in has ended: they record, and send later. */
+  readonly offlineUser = computed(() => (this.ended() ? this.current()?.person : undefined));
+
   /** Before the first screen: from this phone, without waiting for the network. */
   async restore(): Promise<void> {
     try {
@@ -43,7 +46,11 @@ export class SessionStore {
 
   /** Ends the session on the server, if it can be reached, and closes the phone for this person. */
   async signOut(): Promise<void> {
-    await this.phone.lock();
+    try {
+      await this.phone.lock();
+    } catch {
+      // Nothing was kept that could open by itself.
+    }
     this.current.set(undefined);
     this.ended.set(false);
     try {
@@ -54,8 +61,12 @@ export class SessionStore {
     }
   }
 
-  /** Refreshes if the access token is about to end. False: someone must sign in again to send. */
+  /**
+   * Refreshes if the access token is about to end. False: nothing may be sent for this person now.
+   * The cookies are one for all tabs: if another tab signed out, or someone else in, this one follows.
+   */
   async fresh(now: number): Promise<boolean> {
+    await this.follow();
     const session = this.current();
     if (!session || this.ended()) return false;
     return Date.parse(session.until) - now > BEFORE_END ? true : this.refresh();
@@ -67,10 +78,19 @@ export class SessionStore {
     return this.refreshing;
   }
 
+  private async follow(): Promise<void> {
+    const last = await this.phone.last();
+    if (last?.person.id !== this.current()?.person.id) this.current.set(last);
+  }
+
   private async refreshOnce(): Promise<boolean> {
     try {
-      await this.take(await this.api.call(routes.refreshSession));
-      return true;
+      const session = await this.api.call(routes.refreshSession);
+      const same = session.person.id === this.current()?.person.id;
+      // Whose cookies these are now is not whose queue this is.
+      if (same) await this.take(session);
+      else await this.follow();
+      return same;
     } catch (error) {
       if (error instanceof ApiError && error.status === 401) this.ended.set(true);
       return false;
@@ -78,7 +98,11 @@ export class SessionStore {
   }
 
   private async take(session: Session): Promise<void> {
-    await this.phone.keep(session);
+    try {
+      await this.phone.keep(session);
+    } catch {
+      // This window can't keep anything: it works with signal, and the frame says what is missing.
+    }
     this.current.set(session);
     this.ended.set(false);
   }

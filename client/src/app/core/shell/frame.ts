@@ -1,4 +1,12 @@
-import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  ElementRef,
+  computed,
+  effect,
+  inject,
+  viewChild,
+} from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
 import {
   NavigationEnd,
@@ -10,6 +18,7 @@ import {
 } from '@angular/router';
 import { filter, map } from 'rxjs';
 import { Connection } from '../device/connection';
+import { DeviceStore } from '../device/device-store';
 import { SessionStore } from '../session/session-store';
 import { LampMark } from './lamp-mark';
 import { placesOf } from './navigation';
@@ -34,6 +43,18 @@ export class Frame {
     ),
   );
 
+  private readonly content = viewChild.required<ElementRef<HTMLElement>>('content');
+  private readonly path = toSignal(
+    this.router.events.pipe(
+      filter((event) => event instanceof NavigationEnd),
+      map(({ urlAfterRedirects }) => urlAfterRedirects.replace(/[?#].*$/, '')),
+    ),
+  );
+  private pathBefore?: string;
+  private readonly store = inject(DeviceStore);
+
+  protected readonly unusable = computed(() => this.store.status() === 'unusable');
+  protected readonly tooOld = this.store.tooOld;
   protected readonly updates = inject(Updates);
   protected readonly online = inject(Connection).online;
   protected readonly session = this.sessions.session;
@@ -49,6 +70,20 @@ export class Frame {
   /** Without navigation at all, or without it on a phone. */
   protected readonly alone = computed(() => !this.session());
   protected readonly bare = computed(() => Boolean(this.data()?.['bare']));
+
+  constructor() {
+    // A reader of the screen hears the new page; at the first one the browser does that by itself.
+    effect(() => {
+      const path = this.path();
+      if (path === undefined || path === this.pathBefore) return;
+      if (this.pathBefore !== undefined) this.toContent();
+      this.pathBefore = path;
+    });
+  }
+
+  protected toContent(): void {
+    this.content().nativeElement.focus({ preventScroll: true });
+  }
 }
 
 function deepest(snapshot: ActivatedRouteSnapshot): ActivatedRouteSnapshot {
