@@ -55,10 +55,12 @@ export class RelayLook {
   readonly glove = input(false);
   readonly seen = output<RelayPosition>();
 
-  protected readonly choices: readonly { readonly position: RelayPosition; readonly label: string }[] =
-    [
-      { position: 'in', label: $localize`in` },
-      { position: 'out', label: $localize`out` },
-      { position: 'chatter', label: $localize`chatters` },
-    ];
+  protected readonly choices: readonly {
+    readonly position: RelayPosition;
+    readonly label: string;
+  }[] = [
+    { position: 'in', label: $localize`in` },
+    { position: 'out', label: $localize`out` },
+    { position: 'chatter', label: $localize`chatters` },
+  ];
 }

@@ -25,7 +25,9 @@ export class CaseList {
   protected titleOf(state: CaseState): string {
     const lift = this.store.lift(state.liftId);
     const site = lift && this.store.site(lift.siteId);
-    return lift ? `${site ? `${site.name}, ` : ''}${lift.name}` : $localize`A lift not on this phone`;
+    return lift
+      ? `${site ? `${site.name}, ` : ''}${lift.name}`
+      : $localize`A lift not on this phone`;
   }
 
   protected whatOf({ finding, complaint }: CaseState): string {

@@ -31,7 +31,9 @@ export class Arrive {
   protected readonly live = cautionSentences('live terminals');
   protected readonly places = computed(() => this.desk.circuit()?.places ?? []);
   protected readonly relays = computed(() =>
-    (this.desk.circuit()?.parts ?? []).filter(({ kind }) => kind === 'coil').map(({ name }) => name),
+    (this.desk.circuit()?.parts ?? [])
+      .filter(({ kind }) => kind === 'coil')
+      .map(({ name }) => name),
   );
   /** As last seen in this case. */
   protected readonly seen = computed(() => {

@@ -21,7 +21,6 @@ export function suggestionOf(advice: Advice | undefined): Suggestion | undefined
 
 /** What the card shows. A tag chosen on the line wins over the suggestion; black rests on the return. */
 export function probesShown(
-  circuit: Circuit,
   advice: Advice | undefined,
   chosen: { readonly red: string; readonly black: string } | undefined,
   here: { readonly place: string; readonly state: LiftState },
@@ -51,8 +50,7 @@ export function cautionsDue(
   place: string,
 ): readonly CautionCode[] {
   return codes.filter(
-    (code) =>
-      !state.acknowledged.some((known) => known.code === code && known.place === place),
+    (code) => !state.acknowledged.some((known) => known.code === code && known.place === place),
   );
 }
 

@@ -1,4 +1,11 @@
-import { ChangeDetectionStrategy, Component, computed, effect, inject, signal } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  inject,
+  signal,
+} from '@angular/core';
 import { RouterLink } from '@angular/router';
 import type { LiftState, RelayPosition } from '@shared/circuit';
 import { cautionSentences, dangerSentence, faultSentence, reasonSentence } from '@shared/contract';
@@ -52,7 +59,7 @@ export class Find {
     state: this.desk.liftState(),
   }));
   protected readonly probes = computed(() =>
-    probesShown(this.circuit(), this.advice(), this.chosen(), this.here()),
+    probesShown(this.advice(), this.chosen(), this.here()),
   );
   protected readonly line = computed(() =>
     lampLine({

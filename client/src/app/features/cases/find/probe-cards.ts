@@ -17,7 +17,9 @@ import type { Circuit } from '@shared/circuit';
         </p>
       </div>
     }
-    <button type="button" (click)="swap.emit()" i18n-aria-label aria-label="Swap the probes">⇄</button>
+    <button type="button" (click)="swap.emit()" i18n-aria-label aria-label="Swap the probes">
+      ⇄
+    </button>
   `,
   styles: `
     :host {

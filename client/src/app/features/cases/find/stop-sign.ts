@@ -7,8 +7,8 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
     <div role="alert">
       <strong i18n>Stop. The string does not protect.</strong>
       <p i18n>
-        Isolate and lock off. Keep people away from the car and the landings. Tell your supervisor now.
-        This case can't be closed as a repair until a named supervisor releases it.
+        Isolate and lock off. Keep people away from the car and the landings. Tell your supervisor
+        now. This case can't be closed as a repair until a named supervisor releases it.
       </p>
     </div>
   `,

@@ -10,7 +10,9 @@ import type { Circuit, LiftState } from '@shared/circuit';
         <span i18n>I am at</span>
         <select #place (change)="placeChange.emit(place.value)">
           @for (each of circuit().places; track each.name) {
-            <option [value]="each.name" [selected]="each.name === this.place()">{{ each.name }}</option>
+            <option [value]="each.name" [selected]="each.name === this.place()">
+              {{ each.name }}
+            </option>
           }
         </select>
       </label>
@@ -21,7 +23,9 @@ import type { Circuit, LiftState } from '@shared/circuit';
           <span>{{ condition.name }}</span>
           <select #value (change)="set(condition.name, value.value)">
             @for (each of condition.values; track each) {
-              <option [value]="each" [selected]="each === state()[condition.name]">{{ each }}</option>
+              <option [value]="each" [selected]="each === state()[condition.name]">
+                {{ each }}
+              </option>
             }
           </select>
         </label>

@@ -22,8 +22,8 @@ import type { Advice } from '@shared/diagnosis';
     </ol>
     @if (advice(); as known) {
       <p class="soft small" i18n>
-        Nothing wrong now: {{ (known.nothingWrong * 100).toFixed(0) }} in 100. Something this circuit
-        does not describe: {{ (known.notDescribed * 100).toFixed(1) }} in 100.
+        Nothing wrong now: {{ (known.nothingWrong * 100).toFixed(0) }} in 100. Something this
+        circuit does not describe: {{ (known.notDescribed * 100).toFixed(1) }} in 100.
       </p>
     }
   `,
