@@ -1,6 +1,12 @@
 import compression from 'compression';
 import express, { type Express, type Request } from 'express';
 import type { Route } from '@shared/contract';
+import { caseRoutes } from './features/cases/routes';
+import { circuitRoutes } from './features/circuits/routes';
+import { liftRoutes } from './features/lifts/routes';
+import { peopleRoutes } from './features/people/routes';
+import { reviewRoutes } from './features/review/routes';
+import { syncRoutes } from './features/sync/routes';
 import { sessionRoutes } from './features/session/routes';
 import { Standing } from './features/session/standing';
 import { aboutRoutes } from './platform/http/about';
@@ -41,6 +47,12 @@ export function createApp(services: Services): Application {
   const { mount, mounted } = mounting({ app, services, callerOf });
   aboutRoutes(mount, services);
   sessionRoutes(mount, services, tokens, standing);
+  peopleRoutes(mount);
+  liftRoutes(mount);
+  circuitRoutes(mount);
+  syncRoutes(mount, services);
+  caseRoutes(mount);
+  reviewRoutes(mount);
   app.use('/api', nothingHere);
   app.use(clientFiles(config.clientFolder));
   app.use(nothingHere);

@@ -11,7 +11,7 @@ import { personChangeSchema, personSchema } from './people';
 import { idSchema, roles, versionSchema } from './primitives';
 import { route } from './route';
 import { sessionSchema, signInSchema } from './session';
-import { eventBatchForDocumentation, eventResultsSchema, feedSchema, packSchema } from './sync';
+import { eventBatchSchema, eventResultsSchema, feedSchema, packSchema } from './sync';
 
 const byId = z.object({ id: idSchema });
 
@@ -141,7 +141,7 @@ export const routes = {
     path: '/api/sync/events',
     summary: 'Send case events; the answer has one result per event.',
     roles,
-    body: eventBatchForDocumentation,
+    body: eventBatchSchema,
     answer: eventResultsSchema,
   }),
   feed: route({

@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { caseEventSchema, storedEventSchema } from '../cases';
+import { storedEventSchema } from '../cases';
 import { circuitRevisionSchema, liftSchema, siteSchema } from './lifts';
 import { idSchema } from './primitives';
 
@@ -13,10 +13,7 @@ export const eventBatchSchema = z.object({
   device: idSchema,
   events: z.array(z.unknown()).min(1).max(MOST_EVENTS_IN_BATCH),
 });
-export const eventBatchForDocumentation = eventBatchSchema.extend({
-  events: z.array(caseEventSchema).min(1).max(MOST_EVENTS_IN_BATCH),
-});
-export type EventBatch = z.infer<typeof eventBatchForDocumentation>;
+export type EventBatch = z.infer<typeof eventBatchSchema>;
 
 export const eventResultSchema = z.object({
   /** The event's id; null where it had none that could be read. */

@@ -24,6 +24,8 @@ export const httpSentences = {
     'Another entry of this phone has this number already. This one is set aside with its data.',
   'sync.envelope-invalid': 'This entry cannot be read. It is set aside with its data.',
   'sync.event-too-large': 'This entry is too large. It is set aside with its data.',
+  'sync.sequence-behind':
+    'A later entry of this phone was here first. This one is set aside with its data.',
   'sync.device-not-yours': 'This phone’s number belongs to someone else.',
   'sync.unknown-lift': 'The lift of this case is not on file.',
   'sync.unknown-circuit': 'The circuit of this case is not on file.',
