@@ -5,6 +5,10 @@ import type { Advice, Observation, ReadingObservation } from '@shared/diagnosis'
 export const FULL_SHARE = 0.85;
 export const NONE_SHARE = 0.1;
 
+/** Belief from which a section is drawn as suspected, and below which it is drawn as cleared. */
+export const WORTH_A_BAR = 0.02;
+export const CLEARED = 0.001;
+
 export type LampLevel = 'live' | 'none' | 'between' | 'unread' | 'proven dead';
 
 /** One terminal of the line. */
@@ -100,6 +104,7 @@ function sectionAfter(k: number, lamps: readonly Lamp[], advice?: Advice): LineS
   if (k < lastLive) return { state: 'live', share: 0 };
   const belief = advice?.sections.find((each) => each.from === from.tag && each.to === to.tag);
   if (!belief) return { state: 'unknown', share: 0 };
-  if (belief.state === 'suspected') return { state: 'suspected', share: belief.probability };
-  return { state: belief.state === 'live' ? 'cleared' : belief.state, share: belief.probability };
+  const share = belief.probability;
+  if (share >= WORTH_A_BAR) return { state: 'suspected', share };
+  return { state: share < CLEARED ? 'cleared' : 'unknown', share };
 }

@@ -26,6 +26,10 @@ export class ReadingPad {
   readonly asked = input(true);
   readonly busy = input(false);
 
+  /** A practice lift: its meter can be asked what the probes show. */
+  readonly practice = input(false);
+
+  readonly practise = output();
   readonly save = output<PadReading>();
   readonly cannotReach = output();
   readonly notSure = output();

@@ -1,4 +1,4 @@
-import { observationsForEngine, type CaseState } from '@shared/cases';
+import { observationsForEngine, type CaseState, type SeenInCase } from '@shared/cases';
 import { CONTROLLER, restingState, type Circuit } from '@shared/circuit';
 import { USUAL_METER, type AdviceRequest, type Meter } from '@shared/diagnosis';
 
@@ -9,7 +9,7 @@ export function adviceRequest(
   meter: Meter = USUAL_METER,
 ): AdviceRequest {
   return {
-    observations: observationsForEngine(state),
+    observations: observationsForEngine(state, stageOf(state)),
     place: placeOf(state),
     state: { ...restingState(circuit), ...state.state },
     unreachable: state.unreachable,
@@ -17,6 +17,10 @@ export function adviceRequest(
     meter,
   };
 }
+
+/** What was read before a repair says nothing about the lift after it. */
+export const stageOf = (state: CaseState): SeenInCase['stage'] =>
+  state.repairs.length > 0 ? 'after repair' : 'finding';
 
 export const placeOf = (state: CaseState): string => state.place ?? CONTROLLER;
 

@@ -1,11 +1,16 @@
 import { Injectable, computed, effect, inject, signal, untracked } from '@angular/core';
-import type { CaseRefusal, EventType, PayloadOf } from '@shared/cases';
+import {
+  observationsForEngine,
+  type CaseRefusal,
+  type EventType,
+  type PayloadOf,
+} from '@shared/cases';
 import type { LiftState, RelayPosition } from '@shared/circuit';
 import { refusalSentence } from '@shared/contract';
 import type { Advice } from '@shared/diagnosis';
 import { DeviceStore } from '../../core/device/device-store';
 import { EnginePort } from '../../core/engine/engine-port';
-import { adviceRequest, placeOf, provenSupply } from './advice-request';
+import { adviceRequest, placeOf, provenSupply, stageOf } from './advice-request';
 import { faultsLeft } from './practice';
 
 /** One open case as its screens share it: what is known, what the engine says, the way to add to it. */
@@ -59,6 +64,15 @@ export class CaseDesk {
   readonly advice = signal<Advice | undefined>(undefined);
   readonly adviceFailed = signal(false);
   readonly thinking = signal(false);
+  /** Names of the circuit's relays, by its coils. */
+  readonly relays = computed(() =>
+    (this.circuit()?.parts ?? []).filter(({ kind }) => kind === 'coil').map(({ name }) => name),
+  );
+  /** Readings and looks of the stage that the case is in: before or after the repair. */
+  readonly observations = computed(() => {
+    const state = this.state();
+    return state ? observationsForEngine(state, stageOf(state)) : [];
+  });
   /** The latest sentence about something that was not taken. */
   readonly problem = signal<string | undefined>(undefined);
 
@@ -110,7 +124,8 @@ export class CaseDesk {
   /** The event of the advice that is on the screen; kept when it is first shown. */
   async shown(): Promise<void> {
     const [advice, state] = [this.advice(), this.state()];
-    if (!advice || !state || state.status !== 'open' || state.finding) return;
+    if (!advice || !state || state.status !== 'open') return;
+    if (state.finding && state.repairs.length === 0) return;
     const { engine, step, suspects, notDescribed, nothingWrong, expectedMinutes } = advice;
     const last = state.advice.at(-1);
     if (last && JSON.stringify(last.step) === JSON.stringify(step)) return;

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
+import { ChangeDetectionStrategy, Component, effect, inject } from '@angular/core';
 import { ActivatedRoute, Router } from '@angular/router';
 import { CaseDesk } from './case-desk';
 import { stageNow } from './case-stage';
@@ -10,13 +10,20 @@ import { stageNow } from './case-stage';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class CaseStart {
+  private readonly desk = inject(CaseDesk);
+  private readonly router = inject(Router);
+  private readonly route = inject(ActivatedRoute);
+
   constructor() {
-    const state = inject(CaseDesk).state();
-    if (state) {
-      void inject(Router).navigate([stageNow(state)], {
-        relativeTo: inject(ActivatedRoute).parent,
-        replaceUrl: true,
-      });
-    }
+    // The case may still be on its way out of the store when this opens.
+    effect(() => {
+      const state = this.desk.state();
+      if (state) {
+        void this.router.navigate([stageNow(state)], {
+          relativeTo: this.route.parent,
+          replaceUrl: true,
+        });
+      }
+    });
   }
 }

@@ -3,7 +3,7 @@ import type { Routes } from '@angular/router';
 export const caseRoutes: Routes = [
   {
     path: '',
-    title: $localize`Cases · Lampline`,
+    title: $localize`Cases`,
     loadComponent: () => import('./case-list').then(({ CaseList }) => CaseList),
   },
   {
@@ -19,49 +19,55 @@ export const caseRoutes: Routes = [
       },
       {
         path: 'arrive',
-        title: $localize`Arrive · Lampline`,
+        title: $localize`Arrive`,
         data: { bare: true },
         loadComponent: () => import('./arrive/arrive').then(({ Arrive }) => Arrive),
       },
       {
         path: 'find',
-        title: $localize`Next reading · Lampline`,
+        title: $localize`Next reading`,
         data: { bare: true },
         loadComponent: () => import('./find/find').then(({ Find }) => Find),
       },
       {
         path: 'finding',
-        title: $localize`Finding · Lampline`,
+        title: $localize`Finding`,
         data: { bare: true },
         loadComponent: () => import('./finding/state-finding').then((m) => m.StateFinding),
       },
       {
         path: 'repair',
-        title: $localize`Repair · Lampline`,
+        title: $localize`Repair`,
         data: { bare: true },
         loadComponent: () => import('./repair/repair').then(({ Repair }) => Repair),
       },
       {
         path: 'prove',
-        title: $localize`Prove · Lampline`,
+        title: $localize`Prove`,
         data: { bare: true },
         loadComponent: () => import('./prove/prove').then(({ Prove }) => Prove),
       },
       {
         path: 'close',
-        title: $localize`Close · Lampline`,
+        title: $localize`Close`,
         data: { bare: true },
         loadComponent: () => import('./close/close-case').then(({ CloseCase }) => CloseCase),
       },
       {
         path: 'links',
-        title: $localize`Links and things disturbed · Lampline`,
+        title: $localize`Links and things disturbed`,
         data: { bare: true },
         loadComponent: () => import('./links/links').then(({ Links }) => Links),
       },
       {
+        path: 'isolate',
+        title: $localize`Isolate`,
+        data: { bare: true },
+        loadComponent: () => import('./isolate/isolate').then(({ Isolate }) => Isolate),
+      },
+      {
         path: 'more',
-        title: $localize`The case · Lampline`,
+        title: $localize`The case`,
         data: { bare: true },
         loadComponent: () => import('./more/more').then(({ More }) => More),
       },

@@ -1,9 +1,10 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { FormsModule } from '@angular/forms';
-import { Router, RouterLink } from '@angular/router';
+import { RouterLink } from '@angular/router';
 import { closingNeeds, outcomes, type ClosingNeed, type OutcomeOfCase } from '@shared/cases';
 import { sentenceOf } from '@shared/contract';
 import { CaseDesk } from '../case-desk';
+import { draft } from '../draft';
 import { logbookText } from './logbook-text';
 
 /** Closing: the outcome, what is still missing with the way to it, the text for the logbook. */
@@ -16,13 +17,12 @@ import { logbookText } from './logbook-text';
 })
 export class CloseCase {
   protected readonly desk = inject(CaseDesk);
-  private readonly router = inject(Router);
 
   protected readonly outcome = signal<OutcomeOfCase>(
     this.desk.state()?.finding ? 'repaired' : 'running on arrival',
   );
-  protected readonly remark = signal('');
-  protected readonly answer = signal('');
+  protected readonly remark = draft(this.desk.caseId(), 'remark');
+  protected readonly answer = draft(this.desk.caseId(), 'answer');
   protected readonly busy = signal(false);
   protected readonly copied = signal(false);
 
@@ -57,7 +57,7 @@ export class CloseCase {
       ...(remark ? { remark } : {}),
     });
     this.busy.set(false);
-    if (kept) await this.router.navigateByUrl(`/cases/${this.desk.caseId()}/close`);
+    if (kept) this.remark.set('');
   }
 
   protected async reply(): Promise<void> {
@@ -92,13 +92,13 @@ const leads: Readonly<Record<ClosingNeed['code'], string>> = {
   'links out': '../links',
   'people in the shaft': '../more',
   'things disturbed': '../links',
-  'danger unreleased': '../more',
+  'danger unreleased': '../isolate',
   'finding missing': '../finding',
   'repair missing': '../repair',
   'proof missing': '../finding',
   'points not read again': '../prove',
   'devices not proven': '../prove',
   'not returned to service': '../prove',
-  'isolation not proven': '../more',
-  'nothing named as left': '../more',
+  'isolation not proven': '../isolate',
+  'nothing named as left': '../isolate',
 };

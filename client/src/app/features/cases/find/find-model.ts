@@ -60,3 +60,27 @@ export function statesToSet(wanted: LiftState, now: LiftState): readonly string[
     .filter((name) => now[name] !== undefined && wanted[name] !== now[name])
     .map((name) => `${name}: ${wanted[name]}`);
 }
+
+/**
+ * The reading that raised a danger, which may be repeated once after isolation: its probes, or undefined
+ * before isolation, after the repeat, and where no reading raised it.
+ */
+export function readingToRepeat(
+  state: CaseState,
+): { readonly red: string; readonly black: string } | undefined {
+  if (!state.isolated?.provenDead) return undefined;
+  const raised = new Set(state.dangers.flatMap(({ observations }) => observations));
+  const at = state.seen.findLastIndex(
+    ({ observation }) => observation.kind === 'reading' && raised.has(observation.id),
+  );
+  const reading = state.seen[at]?.observation;
+  if (reading?.kind !== 'reading') return undefined;
+  const { red, black } = reading;
+  const repeated = state.seen
+    .slice(at + 1)
+    .some(
+      ({ observation }) =>
+        observation.kind === 'reading' && observation.red === red && observation.black === black,
+    );
+  return repeated ? undefined : { red, black };
+}

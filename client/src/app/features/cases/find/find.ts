@@ -6,19 +6,27 @@ import {
   inject,
   signal,
 } from '@angular/core';
-import { RouterLink } from '@angular/router';
 import type { LiftState, RelayPosition } from '@shared/circuit';
-import { cautionSentences, dangerSentence, faultSentence, reasonSentence } from '@shared/contract';
+import { cautionSentences, reasonSentence } from '@shared/contract';
 import { USUAL_METER, type CautionCode } from '@shared/diagnosis';
 import { lampLine } from '../../../ui/line-model';
 import { LineOfLamps } from '../../../ui/line-of-lamps';
 import { ReadingPad, type PadReading } from '../../../ui/reading-pad';
 import { RelayLook } from '../../../ui/relay-look';
 import { CaseDesk } from '../case-desk';
-import { cautionsDue, chosenProbes, probesShown, statesToSet, suggestionOf } from './find-model';
+import { undoneNext } from '../case-undo';
+import { draft } from '../draft';
+import {
+  cautionsDue,
+  chosenProbes,
+  probesShown,
+  readingToRepeat,
+  statesToSet,
+  suggestionOf,
+} from './find-model';
 import { OutcomeRows } from './outcome-rows';
 import { ProbeCards } from './probe-cards';
-import { StopSign } from './stop-sign';
+import { StepNotice } from './step-notice';
 import { SuspectList } from './suspect-list';
 import { Surroundings } from './surroundings';
 
@@ -31,8 +39,7 @@ import { Surroundings } from './surroundings';
     ProbeCards,
     ReadingPad,
     RelayLook,
-    RouterLink,
-    StopSign,
+    StepNotice,
     Surroundings,
     SuspectList,
   ],
@@ -42,12 +49,13 @@ import { Surroundings } from './surroundings';
 })
 export class Find {
   protected readonly desk = inject(CaseDesk);
-  private readonly chosen = signal<{ red: string; black: string } | undefined>(undefined);
+  protected readonly chosen = signal<{ red: string; black: string } | undefined>(undefined);
 
-  protected readonly text = signal('');
+  protected readonly text = draft(this.desk.caseId(), 'reading');
   protected readonly busy = signal(false);
   protected readonly fromPractice = signal(false);
-  protected readonly suspectsOpen = signal(false);
+  /** On a phone the suspects lie over the card; on a desk they stand beside it. */
+  protected readonly sheet = signal(false);
 
   protected readonly advice = this.desk.advice;
   protected readonly step = computed(() => this.advice()?.step);
@@ -64,7 +72,7 @@ export class Find {
   protected readonly line = computed(() =>
     lampLine({
       circuit: this.circuit(),
-      observations: (this.desk.state()?.seen ?? []).map(({ observation }) => observation),
+      observations: this.desk.observations(),
       state: this.desk.liftState(),
       advice: this.advice(),
       provenDead: this.desk.state()?.isolated?.provenDead,
@@ -73,19 +81,47 @@ export class Find {
   protected readonly due = computed(() => {
     const state = this.desk.state();
     const suggestion = this.suggestion();
-    if (!state || !suggestion || !this.probes()?.asked) return [];
-    return cautionsDue(state, suggestion.cautions, suggestion.place);
+    const probes = this.probes();
+    if (!state || !probes) return [];
+    const codes = probes.asked ? (suggestion?.cautions ?? []) : OWN_READING;
+    return cautionsDue(state, codes, probes.place);
   });
   protected readonly toSet = computed(() => {
     const probes = this.probes();
     return probes ? statesToSet(probes.state, this.desk.liftState()) : [];
   });
   protected readonly why = computed(() => (this.suggestion()?.because ?? []).map(reasonSentence));
-  protected readonly canUndo = computed(() => (this.desk.state()?.undoable.length ?? 0) > 0);
+  protected readonly undone = computed(() => {
+    const state = this.desk.state();
+    return state && undoneNext(state);
+  });
+  /** Range, lift state and minutes, beside the meter's function. */
+  protected readonly around = computed(() => {
+    const [probes, suggestion] = [this.probes(), this.suggestion()];
+    if (!probes) return '';
+    const state = Object.entries(probes.state).map(([name, value]) => `${name} ${value}`);
+    const minutes = suggestion?.minutes.toFixed(1);
+    return [
+      ...state,
+      ...(probes.asked && minutes ? [$localize`about ${minutes}:minutes: min`] : []),
+    ]
+      .map((words) => `· ${words}`)
+      .join(' ');
+  });
+  /** What stands over the card. */
+  protected readonly lead = computed(() => {
+    const probes = this.probes();
+    if (probes) return !probes.asked ? 'own' : probes.place === this.desk.place() ? 'here' : 'away';
+    if (this.suggestion()?.kind === 'relay') return 'look';
+    return this.advice() || this.desk.adviceFailed() ? 'stands' : 'thinking';
+  });
+  /** After isolation, the reading that raised the danger, once. */
+  protected readonly repeatable = computed(() => {
+    const state = this.desk.state();
+    return state && !this.chosen() ? readingToRepeat(state) : undefined;
+  });
 
   protected readonly cautionSentences = cautionSentences;
-  protected readonly dangerSentence = dangerSentence;
-  protected readonly faultSentence = faultSentence;
 
   constructor() {
     effect(() => {
@@ -123,10 +159,10 @@ export class Find {
   }
 
   protected async understood(): Promise<void> {
-    const suggestion = this.suggestion();
-    if (!suggestion) return;
+    const place = this.probes()?.place;
+    if (place === undefined) return;
     const codes: CautionCode[] = [...this.due()];
-    await this.desk.add('caution acknowledged', { codes, place: suggestion.place });
+    await this.desk.add('caution acknowledged', { codes, place });
   }
 
   protected async save({ volts, entered }: PadReading): Promise<void> {
@@ -208,7 +244,10 @@ export class Find {
   }
 
   protected async undo(): Promise<void> {
-    const last = this.desk.state()?.undoable.at(-1);
-    if (last) await this.desk.add('event withdrawn', { of: last });
+    const of = this.undone();
+    if (of) await this.desk.add('event withdrawn', { of });
   }
 }
+
+/** Cautions before a reading that nobody asked for. */
+const OWN_READING: readonly CautionCode[] = ['live terminals', 'may start when cleared'];

@@ -1,7 +1,8 @@
-import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { Outcome } from '@shared/diagnosis';
 import type { LampLevel } from '../../../ui/line-model';
 import { LampSign } from '../../../ui/lamp';
+import { outcomeRows, type OutcomeRow } from './outcome-model';
 
 /** What each outcome of the reading would leave. */
 @Component({
@@ -9,7 +10,7 @@ import { LampSign } from '../../../ui/lamp';
   imports: [LampSign],
   template: `
     <ul i18n-aria-label aria-label="What each outcome would mean">
-      @for (outcome of outcomes(); track $index) {
+      @for (outcome of rows(); track outcome.band) {
         <li>
           <app-lamp [level]="levelOf(outcome)" />
           <strong>{{ valueOf(outcome) }}</strong>
@@ -21,19 +22,22 @@ import { LampSign } from '../../../ui/lamp';
   styles: `
     li {
       display: grid;
-      grid-template-columns: 26px 74px minmax(0, 1fr);
+      grid-template-columns: 24px 68px minmax(0, 1fr);
       gap: 6px;
       align-items: center;
-      min-height: 28px;
+      min-height: 26px;
       font-size: var(--text-13);
       line-height: 1.25;
     }
     app-lamp {
-      width: 26px;
-      height: 26px;
+      width: 24px;
+      height: 24px;
     }
     span {
+      overflow: hidden;
       color: var(--soft);
+      text-overflow: ellipsis;
+      white-space: nowrap;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -43,25 +47,38 @@ export class OutcomeRows {
   /** The string's nominal volts. */
   readonly volts = input.required<number>();
 
-  protected levelOf({ band }: Outcome): LampLevel {
+  protected readonly rows = computed(() => outcomeRows(this.outcomes()));
+
+  protected levelOf({ band }: OutcomeRow): LampLevel {
     return band === 'full' || band === 'in' ? 'live' : band === 'between' ? 'between' : 'none';
   }
 
-  protected valueOf({ band, fromVolts, toVolts }: Outcome): string {
-    if (band === 'full') return $localize`about ${this.volts()}:volts:`;
-    if (band === 'none') return $localize`near 0`;
-    if (fromVolts !== undefined && toVolts !== undefined) {
-      return `${fromVolts.toFixed(0)}–${toVolts.toFixed(0)}`;
+  protected valueOf({ band, fromVolts, toVolts }: OutcomeRow): string {
+    switch (band) {
+      case 'full':
+        return $localize`about ${this.volts().toFixed(0)}:volts:`;
+      case 'none':
+        return $localize`near 0`;
+      case 'in':
+        return $localize`in`;
+      case 'out':
+        return $localize`out`;
+      case 'between':
+        return fromVolts !== undefined && toVolts !== undefined
+          ? $localize`${fromVolts.toFixed(0)}:from: to ${toVolts.toFixed(0)}:to:`
+          : $localize`between`;
     }
-    return $localize`between`;
   }
 
-  protected meaningOf({ leaves, stretch, probability }: Outcome): string {
+  protected meaningOf({ leaves, stretch, probability }: OutcomeRow): string {
     const percent = Math.round(probability * 100);
     const share = percent < 1 ? $localize`hardly likely` : $localize`${percent}:percent: in 100`;
     const what = stretch
       ? $localize`${stretch[0]}:from: to ${stretch[1]}:to:`
-      : leaves.slice(0, 2).join(', ') + (leaves.length > 2 ? ' …' : '');
-    return what ? `${what} · ${share}` : share;
+      : leaves.slice(0, SHOWN).join(', ') + (leaves.length > SHOWN ? ' …' : '');
+    return what ? `${share} · ${what}` : share;
   }
 }
+
+/** Parts named in a row. */
+const SHOWN = 2;

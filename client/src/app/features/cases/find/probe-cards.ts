@@ -18,14 +18,14 @@ import type { Circuit } from '@shared/circuit';
       </div>
     }
     <button type="button" (click)="swap.emit()" i18n-aria-label aria-label="Swap the probes">
-      ⇄
+      <span class="sign" aria-hidden="true">⇄</span>
     </button>
   `,
   styles: `
     :host {
       position: relative;
       display: grid;
-      grid-template-columns: 1fr 1fr;
+      grid-template-columns: repeat(2, minmax(0, 1fr));
       gap: 8px;
     }
     .probe {
@@ -33,14 +33,14 @@ import type { Circuit } from '@shared/circuit';
       grid-template-columns: 16px minmax(0, 1fr);
       gap: 10px;
       align-items: center;
-      min-height: 76px;
-      padding: 8px 10px;
+      min-height: 64px;
+      padding: 6px 14px 6px 10px;
       border: 1px solid var(--edge);
       border-radius: var(--corner);
       background: var(--panel);
     }
     svg {
-      height: 46px;
+      height: 42px;
       fill: #050505;
       stroke: var(--edge);
       stroke-width: 1.5;
@@ -64,6 +64,19 @@ import type { Circuit } from '@shared/circuit';
       line-height: 1.25;
       display: block;
     }
+    .sign {
+      display: grid;
+      place-items: center;
+      width: 26px;
+      height: 26px;
+      margin: auto;
+      border: 1px solid var(--edge);
+      border-radius: 50%;
+      background: var(--ground);
+      color: var(--ink);
+      font-size: var(--text-13);
+      line-height: 1;
+    }
     button {
       position: absolute;
       top: 50%;
@@ -72,10 +85,10 @@ import type { Circuit } from '@shared/circuit';
       height: 48px;
       border: 0;
       background: none;
-      color: var(--soft);
+      color: var(--ink);
+      font-size: var(--text-15);
       transform: translate(-50%, -50%);
       cursor: pointer;
-      font-size: var(--text-19);
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -11,6 +11,7 @@ import { ActivatedRoute, Router } from '@angular/router';
 import { modesOf, type Fault, type FaultMode } from '@shared/circuit';
 import { modeWord } from '@shared/contract';
 import { CaseDesk } from '../case-desk';
+import { draft } from '../draft';
 import { deviceOf } from '../practice';
 import { directReading } from './direct-reading';
 
@@ -29,8 +30,8 @@ export class StateFinding {
 
   protected readonly part = signal('');
   protected readonly mode = signal<FaultMode | ''>('');
-  protected readonly cause = signal('');
-  protected readonly without = signal('');
+  protected readonly cause = draft(this.desk.caseId(), 'cause');
+  protected readonly without = draft(this.desk.caseId(), 'without');
   protected readonly tried = signal(false);
   protected readonly busy = signal(false);
   protected readonly modeWord = modeWord;
@@ -98,7 +99,10 @@ export class StateFinding {
       restsOnOneReading: this.found()?.restsOnOneReading ?? false,
     });
     this.busy.set(false);
-    if (kept) await this.router.navigate(['..', 'repair'], { relativeTo: this.route });
+    if (!kept) return;
+    this.cause.set('');
+    this.without.set('');
+    await this.router.navigate(['..', 'repair'], { relativeTo: this.route });
   }
 
   private fault(mode: FaultMode): Fault {

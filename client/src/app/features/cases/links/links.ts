@@ -4,6 +4,7 @@ import { RouterLink } from '@angular/router';
 import { disturbances } from '@shared/cases';
 import { NEW_ID } from '../../../core/device/ids';
 import { CaseDesk } from '../case-desk';
+import { draft } from '../draft';
 
 /** The register: temporary links fitted and removed, and everything else that was disturbed. */
 @Component({
@@ -17,13 +18,13 @@ export class Links {
   protected readonly desk = inject(CaseDesk);
   private readonly newId = inject(NEW_ID);
 
-  protected readonly mark = signal('');
+  protected readonly mark = draft(this.desk.caseId(), 'link mark');
   protected readonly from = signal('');
   protected readonly to = signal('');
-  protected readonly reason = signal('');
+  protected readonly reason = draft(this.desk.caseId(), 'link reason');
   protected readonly found = signal(false);
   protected readonly tried = signal(false);
-  protected readonly thing = signal('');
+  protected readonly thing = draft(this.desk.caseId(), 'thing');
   protected readonly kind = signal<(typeof disturbances)[number]>('lifted lead');
   protected readonly kinds = disturbances.map((kind) => ({ kind, label: kindNames[kind] }));
 

@@ -1,9 +1,10 @@
 import { DatePipe } from '@angular/common';
-import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import { FormsModule } from '@angular/forms';
 import { RouterLink } from '@angular/router';
-import { dangerSentence, refusalSentence } from '@shared/contract';
+import { refusalSentence } from '@shared/contract';
 import { CaseDesk } from '../case-desk';
+import { draft } from '../draft';
 import { eventWord } from './event-word';
 
 /** The rest of a case: links, isolation, notes, and everything that was recorded, with where it is kept. */
@@ -17,13 +18,8 @@ import { eventWord } from './event-word';
 export class More {
   protected readonly desk = inject(CaseDesk);
 
-  protected readonly note = signal('');
-  protected readonly provenDead = signal(false);
-  protected readonly noticeFitted = signal(false);
-  protected readonly told = signal('');
-  protected readonly left = signal('');
+  protected readonly note = draft(this.desk.caseId(), 'note');
 
-  protected readonly dangerSentence = dangerSentence;
   protected readonly eventWord = eventWord;
   protected readonly refusalSentence = refusalSentence;
   protected readonly entries = computed(() => [...this.desk.entries()].reverse());
@@ -31,22 +27,5 @@ export class More {
   protected async write(): Promise<void> {
     const text = this.note().trim();
     if (text && (await this.desk.add('note written', { text }))) this.note.set('');
-  }
-
-  protected async isolate(): Promise<void> {
-    const told = this.told().trim();
-    await this.desk.add('isolated', {
-      provenDead: this.provenDead(),
-      noticeFitted: this.noticeFitted(),
-      ...(told ? { told } : {}),
-      left: this.left()
-        .split('\n')
-        .map((line) => line.trim())
-        .filter(Boolean),
-    });
-  }
-
-  protected async energise(): Promise<void> {
-    await this.desk.add('re-energised', {});
   }
 }

@@ -138,7 +138,7 @@ export class Prove {
     const how = this.how().trim() || $localize`Operated; string and relay watched`;
     if (await this.desk.add('device proven', { device, result, how })) this.how.set('');
     if (result === 'did not stop')
-      await this.router.navigate(['..', 'more'], { relativeTo: this.route });
+      await this.router.navigate(['..', 'isolate'], { relativeTo: this.route });
   }
 
   protected async serve(): Promise<void> {

@@ -10,6 +10,7 @@ import { FormsModule } from '@angular/forms';
 import { ActivatedRoute, Router, RouterLink } from '@angular/router';
 import { cautionSentences } from '@shared/contract';
 import { CaseDesk } from '../case-desk';
+import { draft } from '../draft';
 import { deviceOf } from '../practice';
 
 /** What was done, which devices were touched, and the parts used. */
@@ -25,10 +26,10 @@ export class Repair {
   private readonly router = inject(Router);
   private readonly route = inject(ActivatedRoute);
 
-  protected readonly what = signal('');
+  protected readonly what = draft(this.desk.caseId(), 'repair');
   protected readonly touched = signal<readonly string[]>([]);
-  protected readonly partName = signal('');
-  protected readonly partNumber = signal('');
+  protected readonly partName = draft(this.desk.caseId(), 'part');
+  protected readonly partNumber = draft(this.desk.caseId(), 'part number');
   protected readonly quantity = signal(1);
   protected readonly tried = signal(false);
   protected readonly busy = signal(false);
@@ -72,6 +73,8 @@ export class Repair {
         : [],
     });
     this.busy.set(false);
-    if (kept) await this.router.navigate(['..', 'prove'], { relativeTo: this.route });
+    if (!kept) return;
+    for (const field of [this.what, this.partName, this.partNumber]) field.set('');
+    await this.router.navigate(['..', 'prove'], { relativeTo: this.route });
   }
 }
