@@ -1,3 +1,4 @@
+import './app/core/shell/without-eval';
 import { loadLocale } from './app/core/shell/locale';
 import { allowOwnScripts } from './app/core/shell/trusted-scripts';
 

@@ -1,4 +1,5 @@
 /// <reference lib="webworker" />
+import '../shell/without-eval';
 import type { Circuit } from '@shared/circuit';
 import { createEngine, type Engine } from '@shared/diagnosis';
 import type { EngineAnswer, EngineRequest } from './engine-messages';
