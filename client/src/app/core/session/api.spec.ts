@@ -54,6 +54,7 @@ describe('a call', () => {
     expect(request.method).toBe('PATCH');
     expect(request.headers.get('X-Lampline')).toBe('1');
     expect(request.headers.get('X-Request-Id')).toBe(ID);
+    expect(request.headers.has('ngsw-bypass')).toBe(true);
     expect(request.headers.get('If-Match')).toBe('"3"');
     expect(request.headers.get('Idempotency-Key')).toBe('k1');
     sent.flush({ id: ID });
