@@ -46,16 +46,17 @@ export function candidatesOf(circuit: Circuit, request: AdviceRequest): readonly
       }
     }
   };
+  // Parts first: the return wire's own two tags are also string tags, and across a part proves most.
+  for (const part of circuit.parts) {
+    const tags = tagsOf(part);
+    if (tags.length === 2) offer(tags[0]!, tags[1]!, true);
+  }
   for (const line of circuit.strings) {
     for (const tag of stringTags(circuit, line)) {
       offer(tag, line.return, false);
       offer(tag, line.supplyReturn, false);
     }
     offer(line.return, line.supplyReturn, false);
-  }
-  for (const part of circuit.parts) {
-    const tags = tagsOf(part);
-    if (tags.length === 2) offer(tags[0]!, tags[1]!, true);
   }
   return [...found.values()];
 }
