@@ -47,7 +47,8 @@ export function alternatingOneRelay(landings: number): Circuit {
         weight: 6,
         between: ['s1', tag(0)],
         ohms: 0.1,
-        inspection: 'Dead: continuity and rating against the drawing. Never uprate; find the cause.',
+        inspection:
+          'Dead: continuity and rating against the drawing. Never uprate; find the cause.',
       },
       ...lineParts(tag(0), devices),
       {

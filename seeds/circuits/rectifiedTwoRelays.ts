@@ -77,7 +77,8 @@ export function rectifiedTwoRelays(landings: number): Circuit {
         weight: 6,
         between: ['15', tag(0)],
         ohms: 0.1,
-        inspection: 'Dead: continuity and rating against the drawing. Never uprate; find the cause.',
+        inspection:
+          'Dead: continuity and rating against the drawing. Never uprate; find the cause.',
       },
       ...lineParts(tag(0), devices),
       coil('stop relay', tag(8)),
@@ -121,4 +122,3 @@ export function rectifiedTwoRelays(landings: number): Circuit {
     ],
   });
 }
-

@@ -48,7 +48,11 @@ export function lineTerminals(devices: readonly LineDevice[]): Terminal[] {
   });
 }
 
-export const atController = (tag: string, label?: string, more: readonly string[] = []): Terminal => ({
+export const atController = (
+  tag: string,
+  label?: string,
+  more: readonly string[] = [],
+): Terminal => ({
   tag,
   ...(label ? { label } : {}),
   places: [CONTROLLER, ...more],

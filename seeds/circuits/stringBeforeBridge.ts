@@ -65,7 +65,8 @@ export function stringBeforeBridge(landings: number): Circuit {
         weight: 6,
         between: ['W1', tag(0)],
         ohms: 0.1,
-        inspection: 'Dead: continuity and rating against the drawing. Never uprate; find the cause.',
+        inspection:
+          'Dead: continuity and rating against the drawing. Never uprate; find the cause.',
       },
       ...lineParts(tag(0), devices),
       {

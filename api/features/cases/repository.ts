@@ -1,16 +1,16 @@
 import { and, asc, desc, eq, inArray, lt, sql } from 'drizzle-orm';
 import type { StoredEvent } from '@shared/cases';
 import type { CaseSummary, QueueEntry } from '@shared/contract';
+import type { CaseLine } from '../../platform/db/caseLine';
 import type { InOrganisation } from '../../platform/db/doors';
 import { caseEvent, caseRow, lift, personDetails, site } from '../../platform/db/schema';
-import { storedEvent } from '../sync/storedEvent';
+import { storedEvent } from '../../platform/db/storedEvent';
 
-export type CaseRowValues = Omit<typeof caseRow.$inferInsert, 'organisationId'>;
 type CaseStatus = CaseSummary['status'];
 
 export async function saveCaseRow(
   { db, organisationId }: InOrganisation,
-  values: CaseRowValues,
+  values: CaseLine,
 ): Promise<void> {
   await db
     .insert(caseRow)

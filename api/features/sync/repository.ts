@@ -2,7 +2,7 @@ import { and, asc, desc, eq, gt, inArray, max, or, sql } from 'drizzle-orm';
 import type { CaseEvent, StoredEvent } from '@shared/cases';
 import type { InOrganisation } from '../../platform/db/doors';
 import { caseEvent, caseRow, counter, quarantine } from '../../platform/db/schema';
-import { storedEvent } from './storedEvent';
+import { storedEvent } from '../../platform/db/storedEvent';
 
 type EventRow = typeof caseEvent.$inferSelect;
 type NewEventRow = typeof caseEvent.$inferInsert;

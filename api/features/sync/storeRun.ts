@@ -24,7 +24,7 @@ import {
   setAside,
   takePositions,
 } from './repository';
-import { sentDigest, storedEvent } from './storedEvent';
+import { sentDigest, storedEvent } from '../../platform/db/storedEvent';
 
 export interface RunContext {
   readonly role: Role;

@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
-import type { CaseEvent, StoredEvent } from '@shared/cases';
-import type { caseEvent } from '../../platform/db/schema';
+import type { StoredEvent } from '@shared/cases';
+import type { caseEvent } from './schema';
 
 /** Keys sorted at every depth: the same content has one text, whatever the order it came in. */
 function canonical(value: unknown): unknown {
@@ -36,16 +36,3 @@ export function storedEvent(row: typeof caseEvent.$inferSelect): StoredEvent {
     position: row.position,
   };
 }
-
-/** What of an event the device sent, without what the server added. */
-export const sentPart = (event: CaseEvent): CaseEvent => ({
-  id: event.id,
-  caseId: event.caseId,
-  device: event.device,
-  sequence: event.sequence,
-  schema: event.schema,
-  type: event.type,
-  payload: event.payload,
-  recordedAt: event.recordedAt,
-  state: event.state,
-});
