@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, inject, input, signal } from '@angu
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { Router } from '@angular/router';
 import { Connection } from '../device/connection';
+import { StorageGrant } from '../device/storage-grant';
 import { LampMark } from '../shell/lamp-mark';
 import { ApiError } from './api-error';
 import { homeOf } from './guards';
@@ -17,6 +18,7 @@ import { SessionStore } from './session-store';
 export class SignIn {
   private readonly sessions = inject(SessionStore);
   private readonly router = inject(Router);
+  private readonly grant = inject(StorageGrant);
 
   /** Where the person wanted to go; from the address. */
   readonly back = input<string>();
@@ -42,6 +44,8 @@ export class SignIn {
     const { email, password } = this.form.getRawValue();
     try {
       const { person } = await this.sessions.signIn(email.trim(), password);
+      // The button was the gesture that browsers want before they promise to keep anything.
+      void this.grant.ask();
       await this.router.navigateByUrl(this.target() ?? homeOf(person.role));
     } catch (error) {
       this.problem.set(error instanceof ApiError ? error.detail : $localize`This did not work.`);
