@@ -8,7 +8,7 @@ import {
   output,
 } from '@angular/core';
 import { LampSign } from './lamp';
-import type { Lamp, LampLine } from './line-model';
+import type { Lamp, LampLine, LineSection } from './line-model';
 
 /** From supply to return in the order wired; touching a lamp chooses its tag for a reading. */
 @Component({
@@ -38,6 +38,11 @@ export class LineOfLamps {
       if (!row || column.scrollHeight <= column.clientHeight) return;
       column.scrollTop = row.offsetTop - column.clientHeight / 2 + row.clientHeight;
     });
+  }
+
+  /** 0 to 1; the root, so that small shares still differ to the eye. */
+  protected widthOf({ share }: LineSection): number {
+    return Math.sqrt(share);
   }
 
   /** What the lamp shows, for those who do not see it. */

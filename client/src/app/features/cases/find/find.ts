@@ -100,14 +100,18 @@ export class Find {
     const [probes, suggestion] = [this.probes(), this.suggestion()];
     if (!probes) return '';
     const state = Object.entries(probes.state).map(([name, value]) => `${name} ${value}`);
-    const minutes = suggestion?.minutes.toFixed(1);
+    const minutes = Math.round(suggestion?.minutes ?? 0);
     return [
       ...state,
-      ...(probes.asked && minutes ? [$localize`about ${minutes}:minutes: min`] : []),
+      ...(probes.asked && minutes > 0 ? [$localize`about ${minutes}:minutes: min`] : []),
     ]
       .map((words) => `· ${words}`)
       .join(' ');
   });
+  /** Without a pad there is room on a phone for what is suspected. */
+  protected readonly roomForSuspects = computed(
+    () => !this.probes() && this.advice() !== undefined && this.step()?.kind !== 'finding',
+  );
   /** What stands over the card. */
   protected readonly lead = computed(() => {
     const probes = this.probes();
