@@ -1,0 +1,2 @@
+export { asLabel, normalise, termsOf } from './normalise';
+export { liftSearch, liftSearchOptions, type LiftSearch, type SearchedLift } from './liftSearch';
