@@ -42,6 +42,7 @@ export class Sync {
   /** The server asked for quiet until then, milliseconds since 1970. */
   private quietUntil = 0;
   private running?: Promise<void>;
+  private packWanted = false;
 
   readonly status = this.state.asReadonly();
   readonly waiting = computed(() => this.store.waiting().length);
@@ -65,6 +66,12 @@ export class Sync {
   syncNow(): Promise<void> {
     this.running ??= this.lock(() => this.round()).finally(() => (this.running = undefined));
     return this.running;
+  }
+
+  /** One round that fetches the pack whatever its age. */
+  refreshNow(): Promise<void> {
+    this.packWanted = true;
+    return this.syncNow();
   }
 
   private async round(): Promise<void> {
@@ -146,7 +153,8 @@ export class Sync {
     const sending = this.ofPerson();
     const kept = this.store.packOf();
     const age = kept ? this.clock.now() - Date.parse(kept.fetchedAt) : Infinity;
-    if (!sending || age < PACK_AGE) return;
+    if (!sending || (age < PACK_AGE && !this.packWanted)) return;
+    this.packWanted = false;
     const { events, position, ...pack } = await this.api.call(routes.pack);
     const { database } = sending;
     const known = await database.value<number>('position');
