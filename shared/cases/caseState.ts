@@ -130,6 +130,7 @@ export interface ClosingNeed {
   readonly code:
     | 'arrival missing'
     | 'links out'
+    | 'found links not entered'
     | 'people in the shaft'
     | 'things disturbed'
     | 'danger unreleased'
@@ -139,6 +140,7 @@ export interface ClosingNeed {
     | 'points not read again'
     | 'devices not proven'
     | 'not returned to service'
+    | 'still isolated'
     | 'isolation not proven'
     | 'nothing named as left';
   /** What exactly: marks of links, names of devices, pairs of tags as `red black`. */

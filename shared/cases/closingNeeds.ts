@@ -12,6 +12,17 @@ export function devicesToProve(state: CaseState): readonly string[] {
 
 const linksOut = (state: CaseState) => state.links.filter(({ removedAt }) => !removedAt);
 
+/** Links that were there on arrival and stand in the register. */
+const entered = (state: CaseState): number => state.links.filter(({ found }) => found).length;
+
+/** A measured finding whose reading was taken back rests on nothing. */
+function proofStands({ finding, seen }: CaseState): boolean {
+  const proof = finding?.proof;
+  return (
+    proof?.kind !== 'measured' || seen.some(({ observation }) => observation.id === proof.reading)
+  );
+}
+
 /**
  * What still stands between this case and its closing with an outcome (records.md, *Outcomes*).
  * Empty: it may be closed.
@@ -30,6 +41,7 @@ export function closingNeeds(state: CaseState, outcome: OutcomeOfCase): readonly
     'links out',
     linksOut(state).map(({ mark }) => mark),
   );
+  missing('found links not entered', entered(state) >= (state.arrival?.linksFound ?? 0));
   need(
     'people in the shaft',
     state.people.filter(({ left }) => !left).map(({ who }) => who),
@@ -49,6 +61,8 @@ export function closingNeeds(state: CaseState, outcome: OutcomeOfCase): readonly
   }
   if (outcome === 'repaired') {
     missing('finding missing', state.finding !== undefined);
+    missing('proof missing', proofStands(state));
+    missing('still isolated', state.isolated === undefined);
     missing('repair missing', state.repairs.length > 0);
     if (state.repairs.length > 0) {
       need(

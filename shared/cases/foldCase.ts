@@ -17,7 +17,9 @@ const WITHDRAWABLE: ReadonlySet<string> = new Set([
   'note written',
 ]);
 
-export const withdrawable = (type: string): boolean => WITHDRAWABLE.has(type);
+/** A device that did not stop the lift is a danger: it is released by a supervisor, never undone. */
+export const withdrawable = ({ type, payload }: Pick<FoldedEvent, 'type' | 'payload'>): boolean =>
+  WITHDRAWABLE.has(type) && payload['result'] !== 'did not stop';
 
 /**
  * A case after one more event. Pure. The first event must open the case; before it nothing folds.
@@ -49,14 +51,15 @@ export function foldCase(events: readonly FoldedEvent[]): CaseState | undefined 
 }
 
 function withdrawnIds(events: readonly FoldedEvent[]): ReadonlySet<string> {
-  const before = new Map<string, string>();
+  const before = new Map<string, FoldedEvent>();
   const withdrawn = new Set<string>();
   for (const event of events) {
-    if (event.type === 'event withdrawn') {
-      const of = event.payload['of'];
-      if (typeof of === 'string' && withdrawable(before.get(of) ?? '')) withdrawn.add(of);
+    const read = event.type === 'event withdrawn' ? readEvent(event) : undefined;
+    if (read?.kind === 'known' && read.event.type === 'event withdrawn') {
+      const of = before.get(read.event.payload.of);
+      if (of && withdrawable(of)) withdrawn.add(of.id);
     }
-    before.set(event.id, event.type);
+    before.set(event.id, event);
   }
   return withdrawn;
 }
@@ -72,7 +75,7 @@ function step(state: CaseState | undefined, event: FoldedEvent): CaseState | und
   const changed = handlers[known.type](state, known as never);
   return {
     ...changed,
-    undoable: withdrawable(known.type) ? [...state.undoable, known.id] : state.undoable,
+    undoable: withdrawable(event) ? [...state.undoable, known.id] : state.undoable,
   };
 }
 

@@ -1,7 +1,6 @@
 import type { CaseRefusal, CaseState, FoldedEvent } from './caseState';
 import { closingNeeds } from './closingNeeds';
 import { readEvent, type KnownEvent } from './event';
-import { withdrawable } from './foldCase';
 import { isReviewType } from './payloads';
 
 /** Who wants to write the event. */
@@ -53,10 +52,11 @@ function refusalOfKnown(state: CaseState, event: KnownEvent): CaseRefusal | unde
   }
   switch (event.type) {
     case 'event withdrawn':
-      return state.undoable.includes(event.payload.of) && withdrawableIn(state, event.payload.of)
-        ? undefined
-        : refusal('nothing-to-withdraw');
+      return refusalOfWithdrawal(state, event.payload.of);
     case 'link fitted':
+      if (event.payload.from === event.payload.to) {
+        return refusal('link-on-one-tag', { tag: event.payload.from });
+      }
       return state.links.some(({ link }) => link === event.payload.link)
         ? refusal('link-already-entered', { mark: event.payload.mark })
         : undefined;
@@ -96,5 +96,10 @@ function refusalOfKnown(state: CaseState, event: KnownEvent): CaseRefusal | unde
   }
 }
 
-const withdrawableIn = (state: CaseState, id: string): boolean =>
-  withdrawable(state.log.find((event) => event.id === id)?.type ?? '');
+function refusalOfWithdrawal(state: CaseState, of: string): CaseRefusal | undefined {
+  if (!state.undoable.includes(of)) return refusal('nothing-to-withdraw');
+  const proof = state.finding?.proof;
+  return proof?.kind === 'measured' && proof.reading === of
+    ? refusal('reading-proves-finding')
+    : undefined;
+}

@@ -9,6 +9,9 @@ export const caseSentences = {
   'case.case-closed':
     'This case is {status}. A reading can no longer be added; write a note, or open a new case.',
   'case.nothing-to-withdraw': 'This entry cannot be taken back; add a note instead.',
+  'case.reading-proves-finding':
+    'The finding rests on this reading. Take back the finding first, then the reading.',
+  'case.link-on-one-tag': 'A link joins two tags; both ends are on {tag}.',
   'case.link-already-entered': 'Link {mark} is in the register already.',
   'case.link-not-out': 'This link is not out.',
   'case.thing-not-disturbed': 'This is not open in the list of things disturbed.',
@@ -19,6 +22,7 @@ export const caseSentences = {
   'case.case-not-ready': 'Something is still missing before this case can close.',
   'need.arrival missing': 'The arrival checks',
   'need.links out': 'Temporary links to be removed: {what}',
+  'need.found links not entered': 'Links counted on arrival that are not in the register yet',
   'need.people in the shaft': 'Out of the shaft first: {what}',
   'need.things disturbed': 'To be put back: {what}',
   'need.danger unreleased': 'A dangerous finding, to be released by a supervisor: {what}',
@@ -28,6 +32,7 @@ export const caseSentences = {
   'need.points not read again': 'Points to read again after the repair: {what}',
   'need.devices not proven': 'Devices to prove: {what}',
   'need.not returned to service': 'Runs and covers, before return to service',
+  'need.still isolated': 'Re-energised, before return to service',
   'need.isolation not proven': 'Isolation proven dead, notice fitted, and who was told',
   'need.nothing named as left': 'Each thing that is left, named',
   'weakness.danger': 'A dangerous sign was found: {danger}.',
