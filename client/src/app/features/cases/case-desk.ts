@@ -5,13 +5,13 @@ import {
   type EventType,
   type PayloadOf,
 } from '@shared/cases';
-import type { LiftState, RelayPosition } from '@shared/circuit';
+import type { Fault, LiftState, RelayPosition } from '@shared/circuit';
 import { refusalSentence } from '@shared/contract';
-import type { Advice } from '@shared/diagnosis';
+import { USUAL_METER, type Advice } from '@shared/diagnosis';
 import { DeviceStore } from '../../core/device/device-store';
 import { EnginePort } from '../../core/engine/engine-port';
 import { adviceRequest, placeOf, provenSupply, stageOf } from './advice-request';
-import { faultsLeft } from './practice';
+import { faultsLeft, operated, operatedPoints } from './practice';
 
 /** One open case as its screens share it: what is known, what the engine says, the way to add to it. */
 @Injectable()
@@ -159,8 +159,30 @@ export class CaseDesk {
   async practiceRelays(): Promise<Readonly<Record<string, RelayPosition>>> {
     const { circuit, hidden } = this.practiceLift();
     const line = circuit.strings[0]!;
-    const probes = { red: line.from, black: line.return, ohms: 10e6 };
+    const probes = { red: line.from, black: line.return, ohms: USUAL_METER.ohms };
     return (await this.engine.practiceReading(circuit, this.liftState(), hidden, probes)).relays;
+  }
+
+  /** Practice only: whether the string opens when a device is operated. */
+  async practiceOperate(device: string): Promise<boolean> {
+    const { circuit, hidden } = this.practiceLift();
+    const points = operatedPoints(circuit, device);
+    for (const { red, black } of points) {
+      const probes = { red, black, ohms: USUAL_METER.ohms };
+      const read = async (faults: readonly Fault[]) => {
+        const { dcVolts, acVolts } = await this.engine.practiceReading(
+          circuit,
+          this.liftState(),
+          faults,
+          probes,
+        );
+        return Math.abs(circuit.stringCurrent === 'direct' ? dcVolts : acVolts);
+      };
+      const before = await read(hidden);
+      const after = await read(operated(circuit, hidden, device));
+      if (before > circuit.nominalVolts / 2 && after < circuit.nominalVolts / 2) return true;
+    }
+    return false;
   }
 
   private practiceLift() {

@@ -1,5 +1,5 @@
 import type { CaseState } from '@shared/cases';
-import type { Circuit, Fault } from '@shared/circuit';
+import { tagsOf, type Circuit, type Fault } from '@shared/circuit';
 
 /** The device that a part belongs to, as a repair names it. */
 export function deviceOf(circuit: Circuit, part: string): string {
@@ -14,4 +14,33 @@ export function faultsLeft(
 ): readonly Fault[] {
   const repaired = new Set(state.repairs.flatMap(({ devices }) => devices));
   return hidden.filter(({ part }) => !repaired.has(deviceOf(circuit, part)));
+}
+
+const contactsOf = (circuit: Circuit, device: string) =>
+  circuit.parts.filter(
+    (part) => part.kind === 'contact' && deviceOf(circuit, part.name) === device,
+  );
+
+/** The faults of a practice lift while a device is held open; a contact that can't open stays shut. */
+export function operated(
+  circuit: Circuit,
+  faults: readonly Fault[],
+  device: string,
+): readonly Fault[] {
+  const open = contactsOf(circuit, device)
+    .filter(({ name }) => !faults.some((fault) => fault.part === name))
+    .map(({ name }): Fault => ({ part: name, mode: 'open' }));
+  return [...faults, ...open];
+}
+
+/** Where it shows that a device opens the string: behind each of its contacts, to the return. */
+export function operatedPoints(
+  circuit: Circuit,
+  device: string,
+): readonly { readonly red: string; readonly black: string }[] {
+  const line = circuit.strings[0]!;
+  return contactsOf(circuit, device)
+    .flatMap(tagsOf)
+    .filter((tag) => tag !== line.return)
+    .map((red) => ({ red, black: line.return }));
 }

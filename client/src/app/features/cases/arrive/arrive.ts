@@ -12,7 +12,7 @@ type Yes = boolean | undefined;
   selector: 'app-arrive',
   imports: [RelayLook],
   templateUrl: './arrive.html',
-  styleUrl: './arrive.scss',
+  styleUrls: ['../stage.scss', './arrive.scss'],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class Arrive {

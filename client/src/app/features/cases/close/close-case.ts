@@ -1,8 +1,15 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { FormsModule } from '@angular/forms';
 import { RouterLink } from '@angular/router';
-import { closingNeeds, outcomes, type ClosingNeed, type OutcomeOfCase } from '@shared/cases';
+import {
+  closingNeeds,
+  outcomes,
+  type CaseState,
+  type ClosingNeed,
+  type OutcomeOfCase,
+} from '@shared/cases';
 import { sentenceOf } from '@shared/contract';
+import { SessionStore } from '../../../core/session/session-store';
 import { CaseDesk } from '../case-desk';
 import { draft } from '../draft';
 import { logbookText } from './logbook-text';
@@ -18,9 +25,9 @@ import { logbookText } from './logbook-text';
 export class CloseCase {
   protected readonly desk = inject(CaseDesk);
 
-  protected readonly outcome = signal<OutcomeOfCase>(
-    this.desk.state()?.finding ? 'repaired' : 'running on arrival',
-  );
+  private readonly sessions = inject(SessionStore);
+
+  protected readonly outcome = signal<OutcomeOfCase>(usualOutcome(this.desk.state()));
   protected readonly remark = draft(this.desk.caseId(), 'remark');
   protected readonly answer = draft(this.desk.caseId(), 'answer');
   protected readonly busy = signal(false);
@@ -45,7 +52,8 @@ export class CloseCase {
   );
   protected readonly logbook = computed(() => {
     const [state, lift, site] = [this.desk.state(), this.desk.lift(), this.desk.site()];
-    return state && lift ? logbookText(state, `${site?.name ?? ''}, ${lift.name}`) : '';
+    const zone = this.sessions.session()?.organisation.timeZone ?? 'UTC';
+    return state && lift ? logbookText(state, `${site?.name ?? ''}, ${lift.name}`, zone) : '';
   });
 
   protected async close(): Promise<void> {
@@ -76,6 +84,13 @@ export class CloseCase {
   }
 }
 
+/** What is offered first; the technician decides. */
+function usualOutcome(state: CaseState | undefined): OutcomeOfCase {
+  if (state?.outcome) return state.outcome;
+  if (state && state.dangers.length > 0) return 'left isolated';
+  return state?.finding ? 'repaired' : 'running on arrival';
+}
+
 const outcomeNames: Readonly<Record<OutcomeOfCase, string>> = {
   repaired: $localize`Repaired`,
   'running on arrival': $localize`Running on arrival, nothing found`,
@@ -90,6 +105,7 @@ const outcomeNames: Readonly<Record<OutcomeOfCase, string>> = {
 const leads: Readonly<Record<ClosingNeed['code'], string>> = {
   'arrival missing': '../arrive',
   'links out': '../links',
+  'found links not entered': '../links',
   'people in the shaft': '../more',
   'things disturbed': '../links',
   'danger unreleased': '../isolate',
@@ -99,6 +115,7 @@ const leads: Readonly<Record<ClosingNeed['code'], string>> = {
   'points not read again': '../prove',
   'devices not proven': '../prove',
   'not returned to service': '../prove',
+  'still isolated': '../isolate',
   'isolation not proven': '../isolate',
   'nothing named as left': '../isolate',
 };

@@ -100,7 +100,7 @@ export class Find {
     const [probes, suggestion] = [this.probes(), this.suggestion()];
     if (!probes) return '';
     const state = Object.entries(probes.state).map(([name, value]) => `${name} ${value}`);
-    const minutes = Math.round(suggestion?.minutes ?? 0);
+    const minutes = probes.place === this.desk.place() ? 0 : Math.round(suggestion?.minutes ?? 0);
     return [
       ...state,
       ...(probes.asked && minutes > 0 ? [$localize`about ${minutes}:minutes: min`] : []),

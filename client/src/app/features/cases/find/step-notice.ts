@@ -4,6 +4,7 @@ import type { CaseState } from '@shared/cases';
 import type { Circuit } from '@shared/circuit';
 import { faultSentence } from '@shared/contract';
 import type { Step } from '@shared/diagnosis';
+import { inHundred } from '../sure-words';
 
 type FoundStep = Extract<Step, { kind: 'finding' }>;
 
@@ -26,6 +27,7 @@ export class StepNotice {
   readonly state = input.required<CaseState>();
 
   protected readonly faultSentence = faultSentence;
+  protected readonly inHundred = inHundred;
   protected readonly repaired = computed(() => this.state().repairs.length > 0);
   protected readonly found = computed((): FoundStep | undefined => {
     const step = this.step();
@@ -49,8 +51,4 @@ export class StepNotice {
       }
     });
   });
-
-  protected percent({ suspect }: FoundStep): string {
-    return (suspect.probability * 100).toFixed(0);
-  }
 }

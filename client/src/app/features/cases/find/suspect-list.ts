@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { faultSentence } from '@shared/contract';
 import type { Advice } from '@shared/diagnosis';
+import { inHundred } from '../sure-words';
 
 /** Suspects with how sure the readings make them, likeliest first. */
 @Component({
@@ -22,8 +23,8 @@ import type { Advice } from '@shared/diagnosis';
     </ol>
     @if (advice(); as known) {
       <p class="soft small" i18n>
-        Nothing wrong now: {{ (known.nothingWrong * 100).toFixed(0) }} in 100. Something this
-        circuit does not describe: {{ (known.notDescribed * 100).toFixed(1) }} in 100.
+        Nothing wrong now: {{ inHundred(known.nothingWrong) }}. Something this circuit does not
+        describe: {{ inHundred(known.notDescribed) }}.
       </p>
     }
   `,
@@ -74,11 +75,12 @@ import type { Advice } from '@shared/diagnosis';
 })
 export class SuspectList {
   readonly advice = input<Advice>();
+  protected readonly inHundred = inHundred;
 
   protected readonly rows = computed(() =>
     (this.advice()?.suspects ?? []).slice(0, SHOWN).map(({ faults, probability }) => ({
       name: faultSentence(faults[0]!),
-      percent: `${(probability * 100).toFixed(probability < 0.1 ? 1 : 0)} %`,
+      percent: inHundred(probability),
       width: probability * 100,
       also:
         faults.length > 1

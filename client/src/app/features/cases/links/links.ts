@@ -38,7 +38,7 @@ export class Links {
     return Math.max(0, (this.desk.state()?.arrival?.linksFound ?? 0) - entered);
   });
   protected readonly missing = computed(
-    () => !this.mark().trim() || !this.from() || !this.to() || !this.reason().trim(),
+    () => !this.mark().trim() || !this.from().trim() || !this.to().trim() || !this.reason().trim(),
   );
 
   protected async enter(): Promise<void> {
@@ -47,8 +47,8 @@ export class Links {
     const kept = await this.desk.add('link fitted', {
       link: this.newId(),
       mark: this.mark().trim(),
-      from: this.from(),
-      to: this.to(),
+      from: this.from().trim(),
+      to: this.to().trim(),
       reason: this.reason().trim(),
       found: this.found() || this.expected() > 0,
     });
