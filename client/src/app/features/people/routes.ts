@@ -1,3 +1,9 @@
 import type { Routes } from '@angular/router';
 
-export const peopleRoutes: Routes = [];
+export const peopleRoutes: Routes = [
+  {
+    path: '',
+    title: $localize`People`,
+    loadComponent: () => import('./people-page').then(({ PeoplePage }) => PeoplePage),
+  },
+];
