@@ -95,6 +95,7 @@ export default tseslint.config(
             'cx',
             'cy',
             'r',
+            'back',
             'x',
             'y',
             'x1',
