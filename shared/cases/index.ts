@@ -42,5 +42,6 @@ export { applyEvent, foldCase, withdrawable } from './foldCase';
 export { closingNeeds, devicesToProve } from './closingNeeds';
 export { pointKey, pointsToReadAgain, readAgain } from './pointsToReadAgain';
 export { refusalOf, type Writer } from './refusalOf';
-export { riskOf, weaknessesOf, type EvidenceWeakness } from './weaknessesOf';
+export { riskOf, weaknessesOf } from './weaknessesOf';
+export type { EvidenceWeakness } from './weakness';
 export { observationsForEngine } from './observationsForEngine';
