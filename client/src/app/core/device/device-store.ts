@@ -126,6 +126,11 @@ export class DeviceStore {
     return this.circuits().get(circuitKey(id, revision));
   }
 
+  /** Whether the pack has a name for this person. */
+  knows(personId: string): boolean {
+    return personId === this.session?.person.id || Object.hasOwn(this.names(), personId);
+  }
+
   nameOf(personId: string | undefined): string {
     if (personId === undefined) return '';
     if (personId === this.session?.person.id) return this.session.person.name;

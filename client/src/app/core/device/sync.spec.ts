@@ -1,5 +1,5 @@
 import { TestBed } from '@angular/core/testing';
-import type { CaseEvent } from '@shared/cases';
+import type { CaseEvent, StoredEvent } from '@shared/cases';
 import { routes, type EventResult, type Session } from '@shared/contract';
 import { Api, type CallOptions } from '../session/api';
 import { ApiError } from '../session/api-error';
@@ -22,6 +22,9 @@ class PlayedServer {
   readonly batches: Batch[] = [];
   position = 0;
   refuse?: ApiError;
+  readonly calls: Called[] = [];
+  feed: readonly StoredEvent[] = [];
+  lastAfter?: unknown;
   result = (event: CaseEvent): EventResult => ({
     id: event.id,
     outcome: 'accepted',
@@ -29,6 +32,7 @@ class PlayedServer {
   });
 
   async call(route: Called, options: CallOptions<Called> = {}): Promise<unknown> {
+    this.calls.push(route);
     if (this.refuse) throw this.refuse;
     switch (route) {
       case routes.sendEvents: {
@@ -48,7 +52,12 @@ class PlayedServer {
           oldestClient: 1,
         };
       case routes.feed:
-        return { events: [], position: this.position, more: false };
+        this.lastAfter = (options.query as { readonly after?: number } | undefined)?.after;
+        return {
+          events: this.feed,
+          position: this.feed.at(-1)?.position ?? this.position,
+          more: false,
+        };
       default:
         throw new Error(`not played: ${route.path}`);
     }
@@ -184,5 +193,40 @@ describe('sending', () => {
     await sync.syncNow();
     expect(server.batches).toEqual([]);
     expect(store.waiting()).toHaveLength(1);
+  });
+});
+
+describe('the feed', () => {
+  it('brings the cases of others, and fetches the pack again for a name that is not on file', async () => {
+    const { server, store, sync } = await phoneWithServer();
+    await sync.syncNow();
+    const packs = () => server.calls.filter((route) => route === routes.pack).length;
+    expect(packs()).toBe(1);
+    server.feed = [
+      {
+        ...asStored(
+          {
+            id: opening.liftId,
+            caseId: opening.circuitId,
+            device: opening.liftId,
+            sequence: 1,
+            schema: 1,
+            type: 'case opened',
+            payload: opening,
+            recordedAt: '2026-11-12T08:00:00.000Z',
+            state: {},
+          },
+          7,
+        ),
+        actor: opening.liftId,
+      },
+    ];
+    await sync.syncNow();
+    expect(store.cases().map(({ id }) => id)).toEqual([opening.circuitId]);
+    expect(packs()).toBe(1);
+    server.feed = [];
+    await sync.syncNow();
+    expect(packs()).toBe(2);
+    expect(server.lastAfter).toBe(7);
   });
 });

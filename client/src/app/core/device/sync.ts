@@ -42,6 +42,7 @@ export class Sync {
   /** The server asked for quiet until then, milliseconds since 1970. */
   private quietUntil = 0;
   private running?: Promise<void>;
+  /** Someone asked for the pack, or the feed named a person whom it does not: it is fetched again. */
   private packWanted = false;
 
   readonly status = this.state.asReadonly();
@@ -142,20 +143,21 @@ export class Sync {
         query: { after, limit: FEED_LIMIT },
       });
       if (events.length > 0) {
+        this.packWanted ||= events.some(({ actor }) => !this.store.knows(actor));
         await this.store.changed(await takeStored(database, events, position));
       }
       if (!more) return;
     }
   }
 
-  /** Fetches the pack where there is none, or where it is old. */
+  /** Fetches the pack where there is none, or where it is old or wanted. */
   private async refreshPack(): Promise<void> {
     const sending = this.ofPerson();
     const kept = this.store.packOf();
     const age = kept ? this.clock.now() - Date.parse(kept.fetchedAt) : Infinity;
     if (!sending || (age < PACK_AGE && !this.packWanted)) return;
-    this.packWanted = false;
     const { events, position, ...pack } = await this.api.call(routes.pack);
+    this.packWanted = false;
     const { database } = sending;
     const known = await database.value<number>('position');
     // The pack holds only some cases: a cursor that exists already must not jump over what it left out.
