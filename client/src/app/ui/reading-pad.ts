@@ -37,6 +37,15 @@ export class ReadingPad {
 
   protected readonly keys = ['7', '8', '9', '4', '5', '6', '1', '2', '3', '±', '0', '.'];
   protected readonly value = computed(() => padValue(this.text(), this.direct()));
+  protected readonly problem = computed(() => {
+    const value = this.value();
+    return value.kind === 'problem' ? value.problem : undefined;
+  });
+  /** The value as it is taken, where the probes are swapped. */
+  protected readonly swapped = computed(() => {
+    const value = this.value();
+    return value.kind === 'volts' && value.swapped ? `−${Math.abs(value.volts)}` : undefined;
+  });
   private from: PadReading['entered'] = 'digits';
 
   protected press(key: string): void {

@@ -1,3 +1,4 @@
+import { USUAL_METER, createEngine } from '@shared/diagnosis';
 import { reading, specCase, specCircuit, eventId, type SpecEvent } from '../case-for-specs';
 import { cautionsDue, chosenProbes, probesShown, readingToRepeat, statesToSet } from './find-model';
 
@@ -7,6 +8,17 @@ describe('probesShown', () => {
   it('takes what was touched on the line over what is asked', () => {
     const chosen = { red: 'T1', black: 'R' };
     expect(probesShown(undefined, chosen, here)).toEqual({ ...chosen, ...here, asked: false });
+  });
+
+  it('keeps what is asked when its probes are swapped', () => {
+    const advice = createEngine(specCircuit).advise({
+      ...{ observations: [], place: 'controller', state: {}, declined: [], meter: USUAL_METER },
+      unreachable: ['SR', 'LR'],
+    });
+    const asked = probesShown(advice, undefined, here)!;
+    const swapped = probesShown(advice, { red: asked.black, black: asked.red }, here);
+    expect(asked.asked).toBe(true);
+    expect(swapped).toEqual({ ...asked, red: asked.black, black: asked.red });
   });
 
   it('shows no probes before the first advice', () => {

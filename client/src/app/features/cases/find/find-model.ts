@@ -19,17 +19,31 @@ export function suggestionOf(advice: Advice | undefined): Suggestion | undefined
   return undefined;
 }
 
-/** What the card shows. A tag chosen on the line wins over the suggestion; black rests on the return. */
+/**
+ * What the card shows. A pair chosen on the line wins over the suggestion; the suggestion's own pair stays
+ * what is asked for when its probes are swapped.
+ */
 export function probesShown(
   advice: Advice | undefined,
   chosen: { readonly red: string; readonly black: string } | undefined,
   here: { readonly place: string; readonly state: LiftState },
 ): Probes | undefined {
-  if (chosen) return { ...chosen, ...here, asked: false };
   const suggestion = suggestionOf(advice);
-  if (suggestion?.kind !== 'reading' || !suggestion.red || !suggestion.black) return undefined;
-  const { red, black, place, state } = suggestion;
-  return { red, black, place, state, asked: true };
+  const asked =
+    suggestion?.kind === 'reading' && suggestion.red && suggestion.black
+      ? {
+          red: suggestion.red,
+          black: suggestion.black,
+          place: suggestion.place,
+          state: suggestion.state,
+          asked: true,
+        }
+      : undefined;
+  if (!chosen) return asked;
+  if (asked && chosen.red === asked.black && chosen.black === asked.red) {
+    return { ...asked, ...chosen };
+  }
+  return { ...chosen, ...here, asked: false };
 }
 
 /** A touch on a lamp: red goes there; on the return, black goes back to it. */
