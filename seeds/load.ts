@@ -16,7 +16,8 @@ import {
 import { sentDigest } from '../api/platform/db/storedEvent';
 import { hashPassword } from '../api/platform/password';
 import type { DemoAccount } from './accounts';
-import { circuitId, liftId, personId, playedEvents } from './cases/playAll';
+import { circuitId, liftId, personId } from './cases/playAll';
+import { playedLog } from './cases/playedLog';
 import { companies, type SeedCompany } from './companies';
 import { seedId } from './seedId';
 
@@ -89,7 +90,7 @@ async function loadCases(
   company: SeedCompany,
 ): Promise<void> {
   const versions = new Map<string, number>();
-  const rows = playedEvents(company).map(({ event, actor }, k) => {
+  const rows = playedLog(company.key).map(({ event, actor }, k) => {
     const caseVersion = (versions.get(event.caseId) ?? 0) + 1;
     versions.set(event.caseId, caseVersion);
     return {
