@@ -1,4 +1,5 @@
-import { foldCase } from '../shared/cases';
+import { foldCase, isReviewType } from '../shared/cases';
+import { appendAudit } from '../api/platform/db/audit';
 import { caseLine } from '../api/platform/db/caseLine';
 import { asOwner, type AsOwner } from '../api/platform/db/doors';
 import {
@@ -113,6 +114,13 @@ async function loadCases(
   for (const caseId of versions.keys()) {
     const state = foldCase(rows.filter((row) => row.caseId === caseId).map(folded));
     if (state) await db.insert(caseRow).values({ ...caseLine(state), organisationId });
+  }
+  for (const { type, caseId, actor, receivedAt } of rows) {
+    if (!isReviewType(type)) continue;
+    await appendAudit(
+      { db, organisationId, personId: actor },
+      { action: type, subject: `case ${caseId}`, outcome: 'done', at: receivedAt },
+    );
   }
 }
 
