@@ -30,6 +30,6 @@ export class LocalTime implements PipeTransform {
   /** @param at ISO 8601, or milliseconds since 1970 */
   transform(at: number | string): string {
     const zone = this.sessions.session()?.organisation.timeZone;
-    return localTime(at, this.clock.now(), zone, document.documentElement.lang);
+    return localTime(at, this.clock.now(), zone, document.documentElement.lang || 'en');
   }
 }
