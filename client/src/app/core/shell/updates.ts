@@ -17,7 +17,13 @@ export class Updates {
     this.worker.unrecoverable.subscribe(() => location.reload());
   }
 
-  take(): void {
+  /** Fetches what is newest, if the server can be reached, and starts it. */
+  async take(): Promise<void> {
+    try {
+      if (this.worker.isEnabled) await this.worker.checkForUpdate();
+    } catch {
+      // Without network the version that is ready already is started.
+    }
     location.reload();
   }
 }
