@@ -85,7 +85,7 @@ describe('lampLine', () => {
   it('draws every lamp as proven dead after prove, test, prove again', () => {
     const observations = [readingOf('a', 'T0', 'R', 109.8)];
     const { lamps } = lampLine({ circuit, observations, state: {}, provenDead: true });
-    expect(lamps.every(({ level }) => level === 'proven dead')).toBe(true);
+    expect(lamps.every(({ level, value }) => level === 'proven dead' && value === '')).toBe(true);
   });
 });
 

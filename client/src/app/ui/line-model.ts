@@ -78,8 +78,8 @@ export function lampLine({
       tag,
       label: tag === line.return ? (terminal?.label ?? 'return') : (terminal?.label ?? ''),
       level,
-      value: reading ? Math.abs(reading.volts).toFixed(1) : '',
-      stale: reading !== undefined && !sameState(reading.state, state),
+      value: reading && !provenDead ? Math.abs(reading.volts).toFixed(1) : '',
+      stale: !provenDead && reading !== undefined && !sameState(reading.state, state),
       next: nextTags.includes(tag),
       away: !(terminal?.places ?? []).some((place) => place === CONTROLLER),
     };

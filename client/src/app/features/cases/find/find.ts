@@ -110,7 +110,11 @@ export class Find {
   });
   /** Without a pad there is room on a phone for what is suspected. */
   protected readonly roomForSuspects = computed(
-    () => !this.probes() && this.advice() !== undefined && this.step()?.kind !== 'finding',
+    () =>
+      !this.probes() &&
+      this.advice() !== undefined &&
+      this.step()?.kind !== 'finding' &&
+      this.step()?.kind !== 'stop',
   );
   /** What stands over the card. */
   protected readonly lead = computed(() => {

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { FormsModule } from '@angular/forms';
 import { RouterLink } from '@angular/router';
+import type { PayloadOf } from '@shared/cases';
 import { CaseDesk } from '../case-desk';
 import { draft } from '../draft';
 
@@ -35,29 +36,47 @@ export class Isolate {
   }
 
   protected async isolate(): Promise<void> {
-    if (this.busy()) return;
-    this.busy.set(true);
     const told = this.told().trim();
-    const kept = await this.desk.add('isolated', {
+    const kept = await this.record({
       provenDead: this.provenDead(),
       noticeFitted: this.done().has('notice'),
       ...(told ? { told } : {}),
-      left: this.left()
-        .split('\n')
-        .map((line) => line.trim())
-        .filter(Boolean),
+      left: linesOf(this.left()),
     });
-    this.busy.set(false);
     if (!kept) return;
     this.told.set('');
     this.left.set('');
     this.done.set(new Set());
   }
 
+  /** The isolation stays as it was recorded; more is named as left. */
+  protected async addLeft(isolated: PayloadOf<'isolated'>): Promise<void> {
+    const more = linesOf(this.left());
+    if (more.length === 0) return;
+    const { provenDead, noticeFitted, told } = isolated;
+    const left = [...new Set([...isolated.left, ...more])];
+    const kept = await this.record({ provenDead, noticeFitted, ...(told ? { told } : {}), left });
+    if (kept) this.left.set('');
+  }
+
+  private async record(isolated: PayloadOf<'isolated'>): Promise<boolean> {
+    if (this.busy()) return false;
+    this.busy.set(true);
+    const kept = await this.desk.add('isolated', isolated);
+    this.busy.set(false);
+    return kept;
+  }
+
   protected async energise(): Promise<void> {
     await this.desk.add('re-energised', {});
   }
 }
+
+const linesOf = (text: string): string[] =>
+  text
+    .split('\n')
+    .map((line) => line.trim())
+    .filter(Boolean);
 
 const PROVEN_DEAD: readonly Step[] = ['locked', 'proven before', 'dead', 'proven after'];
 
