@@ -1,28 +1,37 @@
-import { stringTags, tagsOf, travelOf, type Circuit } from '../circuit';
+import { stringTags, tagsOf, travelOf, type Circuit, type LiftState } from '../circuit';
 import type { AdviceRequest } from './advice';
 import type { MeterFunction } from './observation';
 
-/** Two probes that one place reaches, in the lift state as it is. Nothing here works or moves anything. */
+/** Two probes that one place reaches, in a lift state. */
 export interface Candidate {
   readonly red: string;
   readonly black: string;
   readonly function: MeterFunction;
   readonly place: string;
   readonly minutes: number;
-  /** Both probes on the two ends of a part. */
-  readonly across: boolean;
+  readonly state: LiftState;
+  /** Parts whose own two ends the probes are on. */
+  readonly across: readonly string[];
 }
+
+/** Setting a condition: people told and clear, motor and brake feed made safe, minutes (judgement). */
+export const CONDITION_MINUTES = 2;
 
 export function functionOf(circuit: Circuit): MeterFunction {
   return circuit.stringCurrent === 'direct' ? 'dc volts' : 'ac volts';
 }
 
 /**
- * The permitted readings from here: string tags to the return and to the supply's other pole, and
- * across each part that a place reaches at both ends. Only a digital meter is ever put across a part:
- * a lamp or a low impedance there is a partial bridge.
+ * The permitted readings from here in a lift state: string tags to the return and to the supply's other
+ * pole, and across each part that a place reaches at both ends. Only a digital meter is ever put across a
+ * part: a lamp or a low impedance there is a partial bridge.
+ * @param state the lift state to read in; by default as it is
  */
-export function candidatesOf(circuit: Circuit, request: AdviceRequest): readonly Candidate[] {
+export function candidatesOf(
+  circuit: Circuit,
+  request: AdviceRequest,
+  state: LiftState = request.state,
+): readonly Candidate[] {
   if (request.meter.kind !== 'digital') return [];
   const barred = new Set(request.unreachable);
   const travel = travelOf(circuit);
@@ -33,30 +42,45 @@ export function candidatesOf(circuit: Circuit, request: AdviceRequest): readonly
     ]),
   );
   const range = functionOf(circuit);
+  const setting = state === request.state ? 0 : CONDITION_MINUTES;
+  const across = partsByEnds(circuit);
   const found = new Map<string, Candidate>();
-  const offer = (red: string, black: string, across: boolean) => {
+  const offer = (red: string, black: string) => {
     const key = `${red} ${black} ${range}`;
     if (red === black || found.has(key) || request.declined.includes(key)) return;
     const shared = (places.get(red) ?? []).filter((place) => places.get(black)?.includes(place));
     for (const place of shared) {
-      const minutes = travel.minutesToRead(request.place, place);
+      const minutes = travel.minutesToRead(request.place, place) + setting;
       const best = found.get(key);
       if (Number.isFinite(minutes) && (!best || minutes < best.minutes)) {
-        found.set(key, { red, black, function: range, place, minutes, across });
+        const parts = across.get(endsKey(red, black)) ?? [];
+        found.set(key, { red, black, function: range, place, minutes, state, across: parts });
       }
     }
   };
-  // Parts first: the return wire's own two tags are also string tags, and across a part proves most.
-  for (const part of circuit.parts) {
-    const tags = tagsOf(part);
-    if (tags.length === 2) offer(tags[0]!, tags[1]!, true);
-  }
   for (const line of circuit.strings) {
     for (const tag of stringTags(circuit, line)) {
-      offer(tag, line.return, false);
-      offer(tag, line.supplyReturn, false);
+      offer(tag, line.return);
+      offer(tag, line.supplyReturn);
     }
-    offer(line.return, line.supplyReturn, false);
+    offer(line.return, line.supplyReturn);
+  }
+  for (const part of circuit.parts) {
+    const tags = tagsOf(part);
+    if (tags.length === 2) offer(tags[0]!, tags[1]!);
   }
   return [...found.values()];
+}
+
+const endsKey = (a: string, b: string): string => (a < b ? `${a}|${b}` : `${b}|${a}`);
+
+function partsByEnds(circuit: Circuit): ReadonlyMap<string, readonly string[]> {
+  const parts = new Map<string, string[]>();
+  for (const part of circuit.parts) {
+    const tags = tagsOf(part);
+    if (tags.length !== 2) continue;
+    const key = endsKey(tags[0]!, tags[1]!);
+    parts.set(key, [...(parts.get(key) ?? []), part.name]);
+  }
+  return parts;
 }

@@ -4,8 +4,8 @@ import type { Prediction } from './predictions';
 
 /** Share of readings that are mistaken: wrong tag, wrong function, misread (judgement, 0 to 0.2). */
 export const SLIP = 0.02;
-/** One standard deviation of the model itself: supply, resistances; of the value (judgement). */
-export const MODEL_ERROR = 0.02;
+/** One standard deviation of the model itself, beside the supply: resistances as drawn (judgement). */
+export const MODEL_ERROR = 0.012;
 /** The least standard deviation of a comparison, volts: leakage and resistances not drawn. */
 export const LEAST_DEVIATION_VOLTS = 0.3;
 /** Share of relay positions that are mistaken when seen (judgement). */
@@ -35,11 +35,34 @@ export function readingLikelihood(
   slip = SLIP,
 ): number {
   const flat = anywhere(scaleVolts);
-  if (predicted.floating) return flat;
+  if (predicted.floating) return floatingLikelihood(volts, predicted.volts, meter, scaleVolts);
   const deviation = deviationOf(predicted.volts, meter);
   const z = (volts - predicted.volts) / deviation;
   const peak = Math.exp(-z * z * 0.5) / (deviation * Math.sqrt(2 * Math.PI));
   return (1 - slip) * peak + slip * flat;
+}
+
+/** A floating point shows at most this share of the string's volts: coupled cores, damp (common practice). */
+export const FLOATING_MOST = 0.65;
+/** How often the solved value holds where a point floats; else anything up to the most (judgement). */
+const FLOATING_AS_SOLVED = 0.7;
+/** One standard deviation of a floating point's solved value, of the string's volts (judgement). */
+const FLOATING_DEVIATION = 0.02;
+
+/** A floating point is an interval, not a number: near what leakage as drawn gives, or anywhere below. */
+function floatingLikelihood(
+  volts: number,
+  solved: number,
+  meter: Meter,
+  scaleVolts: number,
+): number {
+  const deviation = Math.hypot(deviationOf(solved, meter), FLOATING_DEVIATION * scaleVolts);
+  const z = (volts - solved) / deviation;
+  const peak = Math.exp(-z * z * 0.5) / (deviation * Math.sqrt(2 * Math.PI));
+  const most = FLOATING_MOST * scaleVolts;
+  const inside = Math.abs(volts) <= most ? 1 / (2 * most) : 0;
+  const drawn = FLOATING_AS_SOLVED * peak + (1 - FLOATING_AS_SOLVED) * inside;
+  return (1 - SLIP) * drawn + SLIP * anywhere(scaleVolts);
 }
 
 export function relayLikelihood(seen: RelayPosition, predicted: RelayPosition | undefined): number {

@@ -3,11 +3,15 @@ export const engineSentences = {
   'reason.prove supply':
     'Shows that meter, range, supply and return are sound before anything is read as dead.',
   'reason.prove return': 'Shows that the return is whole, by the other pole of the supply.',
-  'reason.locate': 'Divides what is left best for the minutes it takes.',
+  'reason.locate': 'Leads to a proved finding in the least minutes.',
   'reason.confirm': 'Measures the part itself: only that proves it.',
   'reason.different': 'Rests the finding on a second, different reading.',
   'reason.repeat': 'The same reading once more, probes lifted and meter proven first.',
   'reason.looking is free': 'Looking at {parts} costs nothing and says which half is open.',
+  'reason.reads as with this fault':
+    '{tags} read {volts} V, as with this fault; healthy it would read {healthy} V.',
+  'reason.would read otherwise':
+    '{tags} read {volts} V; with this part at fault it would read {would} V.',
   'reason.fits the readings': 'Fits the readings so far.',
   'reason.all readings are healthy': 'Every reading is as on a healthy lift.',
   'reason.no reading tells more': 'No reading that can be reached would tell more.',
@@ -15,7 +19,7 @@ export const engineSentences = {
   'reason.live beyond': '{tags} read live: current reaches beyond {parts}.',
   'reason.dead before': '{tags} read dead: {parts} stands between it and the supply.',
   'reason.measured across': 'Measured on the part itself.',
-  'reason.condition': 'Needs {condition} at {value}: at rest this reading says nothing.',
+  'reason.condition': 'Needs {parts}: as the lift stands this reading would say nothing.',
   'caution.live terminals.can': 'Live terminals: shock and burns.',
   'caution.live terminals.do':
     'Rated fused probes, one hand, covers back when done. Work dead where you can.',
