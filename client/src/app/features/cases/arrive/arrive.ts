@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
-import { ActivatedRoute, Router } from '@angular/router';
+import { ActivatedRoute, Router, RouterLink } from '@angular/router';
 import type { RelayPosition } from '@shared/circuit';
 import { cautionSentences } from '@shared/contract';
 import { CaseDesk } from '../case-desk';
@@ -10,7 +10,7 @@ type Yes = boolean | undefined;
 /** Arriving: people first, then what can be seen without a tool. */
 @Component({
   selector: 'app-arrive',
-  imports: [RelayLook],
+  imports: [RelayLook, RouterLink],
   templateUrl: './arrive.html',
   styleUrls: ['../stage.scss', './arrive.scss'],
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -30,11 +30,7 @@ export class Arrive {
   protected readonly may = cautionSentences('may start when cleared');
   protected readonly live = cautionSentences('live terminals');
   protected readonly places = computed(() => this.desk.circuit()?.places ?? []);
-  protected readonly relays = computed(() =>
-    (this.desk.circuit()?.parts ?? [])
-      .filter(({ kind }) => kind === 'coil')
-      .map(({ name }) => name),
-  );
+  protected readonly relays = this.desk.relays;
   /** As last seen in this case. */
   protected readonly seen = computed(() => {
     const positions = new Map<string, RelayPosition>();
