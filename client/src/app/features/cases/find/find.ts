@@ -99,7 +99,7 @@ export class Find {
   protected readonly around = computed(() => {
     const [probes, suggestion] = [this.probes(), this.suggestion()];
     if (!probes) return '';
-    const state = Object.entries(probes.state).map(([name, value]) => `${name} ${value}`);
+    const state = Object.entries(probes.state).map(([name, value]) => `${name}: ${value}`);
     const minutes = probes.place === this.desk.place() ? 0 : Math.round(suggestion?.minutes ?? 0);
     return [
       ...state,

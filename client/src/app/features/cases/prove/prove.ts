@@ -50,7 +50,7 @@ export class Prove {
   });
   protected readonly conditions = computed(() =>
     Object.entries(this.next()?.state ?? {})
-      .map(([name, value]) => `${name} ${value}`)
+      .map(([name, value]) => `${name}: ${value}`)
       .join(' · '),
   );
 
