@@ -6,6 +6,7 @@ import {
   inject,
   signal,
 } from '@angular/core';
+import { RouterLink } from '@angular/router';
 import type { LiftState, RelayPosition } from '@shared/circuit';
 import { cautionSentences, reasonSentence } from '@shared/contract';
 import { USUAL_METER, type CautionCode } from '@shared/diagnosis';
@@ -39,6 +40,7 @@ import { Surroundings } from './surroundings';
     ProbeCards,
     ReadingPad,
     RelayLook,
+    RouterLink,
     StepNotice,
     Surroundings,
     SuspectList,
@@ -57,6 +59,8 @@ export class Find {
   /** On a phone the suspects lie over the card; on a desk they stand beside it. */
   protected readonly sheet = signal(false);
 
+  /** People first: before the arrival checks nothing is asked for. */
+  protected readonly arrived = computed(() => this.desk.state()?.arrival !== undefined);
   protected readonly advice = this.desk.advice;
   protected readonly step = computed(() => this.advice()?.step);
   protected readonly suggestion = computed(() => suggestionOf(this.advice()));
@@ -133,7 +137,7 @@ export class Find {
 
   constructor() {
     effect(() => {
-      if (this.advice()) void this.desk.shown();
+      if (this.advice() && this.arrived()) void this.desk.shown();
     });
     effect(() => {
       const step = this.step();
