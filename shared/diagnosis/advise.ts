@@ -2,6 +2,7 @@ import { finestSections, type Circuit } from '../circuit';
 import type { Advice, AdviceRequest, Step } from './advice';
 import { Consultation } from './consultation';
 import { contradictionOf } from './contradiction';
+import { Evidence } from './evidence';
 import { clearedOf, suspectOf } from './explaining';
 import { hypothesesOf } from './hypotheses';
 import { Predictions } from './predictions';
@@ -25,8 +26,10 @@ export interface Engine {
 export function createEngine(circuit: Circuit): Engine {
   const hypotheses = hypothesesOf(circuit);
   const predictions = new Predictions(circuit, hypotheses);
+  const evidence = new Evidence(circuit, hypotheses, predictions);
   return {
-    advise: (request) => adviceOf(new Consultation(circuit, hypotheses, predictions, request)),
+    advise: (request) =>
+      adviceOf(new Consultation(circuit, hypotheses, predictions, evidence, request)),
   };
 }
 

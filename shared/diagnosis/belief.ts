@@ -1,8 +1,4 @@
-import type { Circuit } from '../circuit';
-import { NOT_DESCRIBED_PRIOR, type Hypothesis } from './hypotheses';
-import { anywhere, readingLikelihood, relayLikelihood } from './likelihood';
-import type { Observation, ReadingObservation } from './observation';
-import type { Predictions } from './predictions';
+import type { ReadingObservation } from './observation';
 
 export interface Belief {
   /** In the order of the hypotheses; with `notDescribed` they add up to 1. */
@@ -23,48 +19,10 @@ export function setUpKey({ red, black, function: range, meter }: ReadingObservat
 }
 
 /**
- * What to believe after the observations, with the supply's volts unknown and learnt: every hypothesis is
- * weighed at every supply factor, and the factors are summed out. Slips are half persistent: a repeat of
- * a set-up is counted once, by its latest value, so that agreement with oneself proves nothing.
+ * The belief that unnormalised logarithms make: `logs[h · factors + s]` of hypothesis h at supply factor s,
+ * `other` of *not described*.
  */
-export function beliefOf(
-  circuit: Circuit,
-  hypotheses: readonly Hypothesis[],
-  predictions: Predictions,
-  observations: readonly Observation[],
-): Belief {
-  const scale = Math.max(circuit.nominalVolts, 1);
-  const width = SUPPLY_FACTORS.length;
-  const before = SUPPLY_FACTORS.map((factor) => -0.5 * ((factor - 1) / SUPPLY_DEVIATION) ** 2);
-  const evidence = before.reduce((sum, log) => sum + Math.exp(log), 0);
-  const logs = new Float64Array(hypotheses.length * width);
-  hypotheses.forEach(({ prior }, h) => {
-    before.forEach((log, s) => (logs[h * width + s] = Math.log(prior / evidence) + log));
-  });
-  let other = Math.log(NOT_DESCRIBED_PRIOR);
-  for (const seen of latest(observations)) {
-    if (seen.kind === 'reading') {
-      const row = predictions.readings(seen.state, { ...seen, ohms: seen.meter.ohms });
-      row.forEach((predicted, h) => {
-        SUPPLY_FACTORS.forEach((factor, s) => {
-          const scaled = { ...predicted, volts: predicted.volts * factor };
-          const likelihood = readingLikelihood(seen.volts, scaled, seen.meter, scale);
-          logs[h * width + s]! += Math.log(likelihood);
-        });
-      });
-      other += Math.log(anywhere(scale));
-    } else if (seen.kind === 'relay') {
-      predictions.relay(seen.state, seen.relay).forEach((position, h) => {
-        const log = Math.log(relayLikelihood(seen.position, position));
-        for (let s = 0; s < width; s++) logs[h * width + s]! += log;
-      });
-      other += Math.log(0.5);
-    }
-  }
-  return normalised(logs, other, hypotheses.length);
-}
-
-function normalised(logs: Float64Array, other: number, size: number): Belief {
+export function normalised(logs: Float64Array, other: number, size: number): Belief {
   const width = SUPPLY_FACTORS.length;
   const top = logs.reduce((most, log) => Math.max(most, log), other);
   const shares = new Array<number>(size).fill(0);
@@ -90,14 +48,4 @@ function momentsOf(factors: readonly number[], described: number): Belief['suppl
   const mean = factors.reduce((sum, w, s) => sum + w * SUPPLY_FACTORS[s]!, 0) / described;
   const square = factors.reduce((sum, w, s) => sum + w * (SUPPLY_FACTORS[s]! - mean) ** 2, 0);
   return { mean, deviation: Math.sqrt(square / described) };
-}
-
-function latest(observations: readonly Observation[]): readonly Observation[] {
-  const kept = new Map<string, Observation>();
-  for (const seen of observations) {
-    const state = JSON.stringify(seen.state);
-    if (seen.kind === 'reading') kept.set(`${setUpKey(seen)} ${state}`, seen);
-    else if (seen.kind === 'relay') kept.set(`relay ${seen.relay} ${state}`, seen);
-  }
-  return [...kept.values()];
 }

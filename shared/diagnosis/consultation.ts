@@ -1,6 +1,7 @@
 import type { Circuit } from '../circuit';
 import type { AdviceRequest, Danger } from './advice';
-import { beliefOf, setUpKey, type Belief } from './belief';
+import { setUpKey, type Belief } from './belief';
+import type { Evidence } from './evidence';
 import { candidatesOf, type Candidate } from './candidates';
 import { dangersOf } from './danger';
 import type { Hypothesis } from './hypotheses';
@@ -39,6 +40,7 @@ export class Consultation {
     readonly circuit: Circuit,
     readonly hypotheses: readonly Hypothesis[],
     readonly predictions: Predictions,
+    private readonly evidence: Evidence,
     readonly request: AdviceRequest,
   ) {
     const tags = new Set(circuit.terminals.map(({ tag }) => tag));
@@ -58,7 +60,7 @@ export class Consultation {
   private readonly known: readonly Observation[];
 
   private believe(observations: readonly Observation[]): Belief {
-    return beliefOf(this.circuit, this.hypotheses, this.predictions, observations);
+    return this.evidence.belief(observations);
   }
 
   /** What would be believed with all readings of one set-up left out. */
@@ -97,7 +99,8 @@ export class Consultation {
     let last: Prediction | undefined;
     for (const h of order) {
       const { volts } = row[h]!;
-      if (!last || this.apart(last, row[h]!)) {
+      // Without the spread: a grid of resistances would chain everything from none to full.
+      if (!last || this.apart({ ...last, spread: 0 }, { ...row[h]!, spread: 0 })) {
         groups.push({ from: volts, to: volts, share: 0, members: [] });
       }
       const group = groups.at(-1)!;
@@ -127,7 +130,8 @@ export class Consultation {
       return other - most > APART * deviationOf(other, this.request.meter);
     }
     const wider = Math.max(Math.abs(a.volts), Math.abs(b.volts));
-    return Math.abs(a.volts - b.volts) > APART * deviationOf(wider, this.request.meter);
+    const deviation = Math.hypot(deviationOf(wider, this.request.meter), a.spread, b.spread);
+    return Math.abs(a.volts - b.volts) > APART * deviation;
   }
 
   /** Hypotheses that no candidate tells from the class's likeliest member; likeliest class first. */

@@ -36,7 +36,7 @@ export function readingLikelihood(
 ): number {
   const flat = anywhere(scaleVolts);
   if (predicted.floating) return floatingLikelihood(volts, predicted.volts, meter, scaleVolts);
-  const deviation = deviationOf(predicted.volts, meter);
+  const deviation = Math.hypot(deviationOf(predicted.volts, meter), predicted.spread);
   const z = (volts - predicted.volts) / deviation;
   const peak = Math.exp(-z * z * 0.5) / (deviation * Math.sqrt(2 * Math.PI));
   return (1 - slip) * peak + slip * flat;

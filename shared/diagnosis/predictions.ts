@@ -15,6 +15,11 @@ export interface MeterPair {
 export interface Prediction {
   readonly volts: number;
   readonly floating: boolean;
+  /**
+   * One standard deviation of the volts by what the hypothesis leaves open: a resistive contact stands for
+   * all resistances up to its neighbours on the grid.
+   */
+  readonly spread: number;
 }
 
 /** What every hypothesis would show, solved when first asked for and kept by lift state. */
@@ -33,13 +38,26 @@ export class Predictions {
     const row = `${key}|${pair.function}`;
     let predictions = this.rows.get(row);
     if (!predictions) {
-      predictions = this.solved(state).map((solution) => {
+      const read = this.solved(state).map((solution) => {
         const reading = solution.read({ ...pair, meterOhms: pair.ohms });
         return { volts: shown(reading, pair.function), floating: reading.floating };
       });
+      predictions = read.map((each, h) => ({ ...each, spread: this.spreadOf(read, h) }));
       this.rows.set(row, predictions);
     }
     return predictions;
+  }
+
+  /** Half the way to the farther neighbour on the grid of resistances, as a uniform deviation. */
+  private spreadOf(read: readonly { readonly volts: number }[], h: number): number {
+    const fault = this.hypotheses[h]!.fault;
+    if (fault?.mode !== 'resistive') return 0;
+    const farther = [h - 1, h + 1].map((other) => {
+      const neighbour = this.hypotheses[other]?.fault;
+      const same = neighbour?.mode === 'resistive' && neighbour.part === fault.part;
+      return same ? Math.abs(read[other]!.volts - read[h]!.volts) : 0;
+    });
+    return Math.max(...farther) / 2 / Math.sqrt(3);
   }
 
   /** In the order of the hypotheses. */

@@ -137,11 +137,20 @@ export class Suggesting {
     );
   }
 
+  /** Of the plan's tests; where those tell nothing more, of any part measured by itself. */
   private best(candidates: readonly Candidate[]): Scored | undefined {
     const all = [...this.about.hypotheses.keys()];
+    const ofPlan = ({ across }: Candidate) =>
+      across.every((part) => this.about.plan.tests(part, all));
+    return (
+      this.bestOf(candidates.filter(ofPlan)) ??
+      this.bestOf(candidates.filter((candidate) => !ofPlan(candidate)))
+    );
+  }
+
+  private bestOf(candidates: readonly Candidate[]): Scored | undefined {
     let best: Scored | undefined;
     for (const candidate of candidates) {
-      if (candidate.across.some((part) => !this.about.plan.tests(part, all))) continue;
       const groups = this.about.groups(candidate);
       if (this.about.bits(groups) < LEAST_BITS) continue;
       const minutes = this.minutesOf(candidate, groups);

@@ -47,8 +47,8 @@ function play({ circuit: given, faults }: Hunt): Step | undefined {
   return undefined;
 }
 
-/** Of 31 hunts, measured. The others end without a finding; why is not yet looked into. */
-const LEAST_RIGHT = 24;
+/** Of 31 hunts, measured: the other two are cores that no place reaches at both ends. */
+const LEAST_RIGHT = 29;
 
 describe('whole hunts of one open, blown or resistive part or diode', () => {
   const modes = ['open', 'blown', 'resistive', 'diode open'];
