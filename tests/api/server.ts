@@ -3,6 +3,7 @@ import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import type { Express } from 'express';
 import type { Logger } from 'pino';
 import supertest, { type Test } from 'supertest';
 import { v7 } from 'uuid';
@@ -50,6 +51,8 @@ export interface TestServer {
   readonly services: Services;
   readonly database: Database;
   readonly mounted: readonly Route[];
+  /** Express itself, for what its router holds. */
+  readonly app: Express;
   /** Two organisations (`ours`, `theirs`) with one person of each role and a running session each. */
   readonly fixtures: Fixtures;
   /** Moves the server's clock on, milliseconds; access tokens keep to the real one. */
@@ -107,6 +110,7 @@ export async function startTestServer(
     services,
     database,
     mounted,
+    app,
     fixtures,
     advance: (milliseconds) => (ahead += milliseconds),
     asOwner: (work) => asOwner(fresh.ownerUrl, work),
