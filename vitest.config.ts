@@ -40,6 +40,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'browser',
+          globalSetup: './tests/api/cluster.ts',
           include: ['tests/browser/**/*.spec.ts'],
           testTimeout: 180_000,
           hookTimeout: 180_000,
