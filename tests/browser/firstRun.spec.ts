@@ -1,5 +1,5 @@
 import type { Browser } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { startDemoSite, type DemoSite } from './demoSite';
 import { huntByPractice } from './hunt';
 import { openBrowser, Visitor, type Size } from './visitor';
@@ -26,6 +26,8 @@ const lifts: Readonly<Record<Size, { readonly name: string; readonly part: RegEx
 };
 
 describe.each(['phone', 'desk'] as const)('on a %s', (size) => {
+  beforeEach(() => site.startServer());
+
   it('finds, proves and records the open contact with the network off', async () => {
     const technician = await Visitor.open(
       browser,

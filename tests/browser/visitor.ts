@@ -86,6 +86,7 @@ export class Visitor {
 
   /** axe finds nothing on this screen. */
   async expectAccessible(screen: string): Promise<void> {
+    await this.page.getByRole('heading', { level: 1 }).first().waitFor();
     const { violations } = await new AxeBuilder({ page: this.page }).analyze();
     const found = violations.map(({ id, nodes }) => `${screen}: ${id} ${nodes[0]?.html ?? ''}`);
     expect(found).toEqual([]);

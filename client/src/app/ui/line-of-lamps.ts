@@ -17,6 +17,8 @@ import type { Lamp, LampLine, LineSection } from './line-model';
   templateUrl: './line-of-lamps.html',
   styleUrl: './line-of-lamps.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
+  // Without buttons in it nothing else lets the keyboard scroll a long line.
+  host: { '[attr.tabindex]': 'fixed() ? 0 : null' },
 })
 export class LineOfLamps {
   readonly line = input.required<LampLine>();
