@@ -1,3 +1,4 @@
+import type { Locator } from 'playwright-core';
 import type { Visitor } from './visitor';
 
 /** More steps than any hunt of the demo takes. */
@@ -27,16 +28,15 @@ export async function huntByPractice(
     }
     if (await understood.isVisible()) {
       await look('cautions');
-      await understood.click();
+      await tap(understood);
       await understood.waitFor({ state: 'hidden' });
     } else if (await lookAt.isVisible()) {
       await look('relay');
-      await lookAt.click();
-      await page.waitForTimeout(300);
+      await tap(lookAt);
     } else {
       await look('reading');
       const before = await leadOf(visitor);
-      await putOn.click();
+      if (!(await tap(putOn))) continue;
       await page.waitForFunction(
         () => (document.querySelector<HTMLInputElement>('#volts')?.value ?? '') !== '',
       );
@@ -49,6 +49,19 @@ export async function huntByPractice(
     }
   }
   throw new Error(`No finding after ${MOST_STEPS} steps.`);
+}
+
+/** How long a button that was there may take, milliseconds; what the engine asks may change meanwhile. */
+const QUICK = 3_000;
+
+/** Touches it; false where it went away before, because the engine's next question came. */
+async function tap(target: Locator): Promise<boolean> {
+  try {
+    await target.click({ timeout: QUICK });
+    return true;
+  } catch {
+    return false;
+  }
 }
 
 const leadOf = async ({ page }: Visitor): Promise<string> =>
