@@ -14,7 +14,7 @@ module.exports = {
     {
       name: 'only-repositories-know-drizzle',
       severity: 'error',
-      from: { path: '^api/', pathNot: '^api/platform/db/|repository\\.ts$' },
+      from: { path: '^api/', pathNot: `^api/platform/db/|repository\\.ts$|${spec}` },
       to: { path: 'node_modules/(drizzle-orm|pg)/' },
     },
     {
