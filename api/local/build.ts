@@ -1,6 +1,7 @@
 import { spawn } from 'node:child_process';
-import { cpSync, rmSync } from 'node:fs';
-import { resolve } from 'node:path';
+import { cpSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { join, resolve } from 'node:path';
+import { brotliCompressSync } from 'node:zlib';
 import { build as bundle } from 'esbuild';
 import { buildIfStale, digestOfSources } from './sources';
 
@@ -49,6 +50,23 @@ async function buildApi(): Promise<void> {
 
 async function buildClient(): Promise<void> {
   await run(process.execPath, ['node_modules/@angular/cli/bin/ng.js', 'build', '--no-progress']);
+  compress(clientFolder);
+}
+
+/** Beside each text of the client its brotli form; what is small already is left alone. */
+const COMPRESSED = /\.(js|css|html|svg|json|webmanifest)$/;
+/** Smaller files gain less than a header costs, bytes. */
+const WORTH_COMPRESSING = 1000;
+
+function compress(folder: string): void {
+  for (const entry of readdirSync(folder, { withFileTypes: true, recursive: true })) {
+    const path = join(entry.parentPath, entry.name);
+    if (!entry.isFile() || !COMPRESSED.test(entry.name)) continue;
+    const content = readFileSync(path);
+    if (content.length >= WORTH_COMPRESSING) {
+      writeFileSync(`${path}.br`, brotliCompressSync(content));
+    }
+  }
 }
 
 /** Runs to the end; its words are shown only when it fails. */
