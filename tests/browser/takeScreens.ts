@@ -31,7 +31,6 @@ try {
   await page.getByRole('heading', { name: 'Saltmarsh House' }).waitFor();
   await page.getByRole('link', { name: /^Lift 1/ }).click();
   await phone.button('Not moving').click();
-  await take(page, 'lift-phone-dark');
   await phone.button('Start a case').click();
   await phone.button('Yes, all safe').click();
   await phone.button('Up').click();
@@ -56,7 +55,6 @@ try {
     .getByRole('link', { name: /Saltmarsh House, Lift 2/ })
     .first()
     .waitFor();
-  await take(desk.page, 'queue-desk-light');
   await desk.page
     .getByRole('link', { name: /Saltmarsh House, Lift 2/ })
     .first()
