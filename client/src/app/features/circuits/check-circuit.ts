@@ -40,7 +40,9 @@ type Checked =
             </div>
           }
           @default {
-            <h2>{{ name() }}</h2>
+            @if (name()) {
+              <h2>{{ name() }}</h2>
+            }
             @if (findings().length === 0) {
               <p i18n>Nothing to say against it.</p>
             }
