@@ -55,6 +55,11 @@ export const appRoutes: Routes = [
     loadChildren: () => import('./features/circuits/routes').then((m) => m.circuitRoutes),
   },
   {
+    path: 'practice',
+    canActivate: [signedIn],
+    loadChildren: () => import('./features/practice/routes').then((m) => m.practiceRoutes),
+  },
+  {
     path: 'phone',
     canActivate: [signedIn],
     loadChildren: () => import('./features/phone/routes').then((m) => m.phoneRoutes),

@@ -32,6 +32,11 @@ const circuits: Place = {
   label: $localize`Circuits`,
   sign: 'M3 12h5M16 12h5M8 12a4 4 0 1 0 8 0 4 4 0 0 0-8 0M9.5 9.5l5 5M14.5 9.5l-5 5',
 };
+const practice: Place = {
+  path: '/practice',
+  label: $localize`Practice`,
+  sign: 'M4 15a8 8 0 0 1 16 0M12 15l4-5M4 19h16',
+};
 const phone: Place = {
   path: '/phone',
   label: $localize`This phone`,
@@ -40,8 +45,8 @@ const phone: Place = {
 
 /** Where each role goes; the API checks again. */
 export const placesOf: Readonly<Record<Role, readonly Place[]>> = {
-  technician: [cases, lifts, phone],
-  engineer: [cases, lifts, circuits, phone],
+  technician: [cases, lifts, practice, phone],
+  engineer: [cases, lifts, practice, circuits, phone],
   supervisor: [review, cases, lifts, people, phone],
   administrator: [people, lifts, circuits, phone],
 };

@@ -25,6 +25,7 @@ import {
   statesToSet,
   suggestionOf,
 } from './find-model';
+import { DeviceSeen, type DeviceSight } from './device-seen';
 import { OutcomeRows } from './outcome-rows';
 import { ProbeCards } from './probe-cards';
 import { StepNotice } from './step-notice';
@@ -35,6 +36,7 @@ import { Surroundings } from './surroundings';
 @Component({
   selector: 'app-find',
   imports: [
+    DeviceSeen,
     LineOfLamps,
     OutcomeRows,
     ProbeCards,
@@ -218,6 +220,12 @@ export class Find {
 
   protected async setState(state: LiftState): Promise<void> {
     await this.desk.add('state changed', {}, state);
+  }
+
+  /** Soft evidence; volts behind a device that is seen open are a sign of danger. */
+  protected async seeDevice(seen: DeviceSight): Promise<void> {
+    await this.desk.add('device seen', seen);
+    this.sheet.set(false);
   }
 
   protected async stand(place: string): Promise<void> {
