@@ -2,16 +2,17 @@ import { finestSections, type Circuit } from '../circuit';
 import type { Advice, AdviceRequest, Step } from './advice';
 import { Consultation } from './consultation';
 import { contradictionOf } from './contradiction';
+import { directReading } from './directProof';
 import { Evidence } from './evidence';
 import { clearedOf, suspectOf } from './explaining';
 import { hypothesesOf } from './hypotheses';
 import { Predictions } from './predictions';
 import { reason } from './reasons';
-import { directReading, pillarsOf, stoppingOf } from './stopping';
+import { pillarsOf, stoppingOf } from './stopping';
 import { Suggesting } from './suggesting';
 
 /** Version of the engine, kept with the advice that was shown. */
-export const ENGINE = '2';
+export const ENGINE = '3';
 const MOST_SUSPECTS = 10;
 /** A section believed in more than this is drawn as suspected; less than that, as cleared. */
 const SUSPECTED = 0.02;

@@ -13,9 +13,12 @@ export const SUPPLY_FACTORS = Array.from({ length: 13 }, (_, k) => 0.88 + 0.02 *
 /** One standard deviation of the supply factor before any reading (judgement). */
 export const SUPPLY_DEVIATION = 0.05;
 
-/** The same text for readings that a persistent slip would repeat: pair, function and meter. */
+/**
+ * The same text for readings that a persistent slip would repeat: pair of tags whichever way round,
+ * function and meter.
+ */
 export function setUpKey({ red, black, function: range, meter }: ReadingObservation): string {
-  return [red, black, range, meter.kind, meter.ohms].join(' ');
+  return [...[red, black].sort(), range, meter.kind, meter.ohms].join(' ');
 }
 
 /**

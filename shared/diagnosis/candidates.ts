@@ -1,5 +1,6 @@
-import { stringTags, tagsOf, travelOf, type Circuit, type LiftState } from '../circuit';
+import { stringTags, travelOf, type Circuit, type LiftState, type Part } from '../circuit';
 import type { AdviceRequest } from './advice';
+import { meterFunctions } from './meterFunctions';
 import type { MeterFunction } from './observation';
 
 /** Two probes that one place reaches, in a lift state. */
@@ -16,10 +17,6 @@ export interface Candidate {
 
 /** Setting a condition: people told and clear, motor and brake feed made safe, minutes (judgement). */
 export const CONDITION_MINUTES = 2;
-
-export function functionOf(circuit: Circuit): MeterFunction {
-  return circuit.stringCurrent === 'direct' ? 'dc volts' : 'ac volts';
-}
 
 /**
  * The permitted readings from here in a lift state: string tags to the return and to the supply's other
@@ -41,11 +38,12 @@ export function candidatesOf(
       reachable && !barred.has(tag) ? own : [],
     ]),
   );
-  const range = functionOf(circuit);
+  const functions = meterFunctions(circuit);
   const setting = state === request.state ? 0 : CONDITION_MINUTES;
   const across = partsByEnds(circuit);
   const found = new Map<string, Candidate>();
   const offer = (red: string, black: string) => {
+    const range = functions(red, black);
     const key = `${red} ${black} ${range}`;
     if (red === black || found.has(key) || request.declined.includes(key)) return;
     const shared = (places.get(red) ?? []).filter((place) => places.get(black)?.includes(place));
@@ -65,11 +63,14 @@ export function candidatesOf(
     }
     offer(line.return, line.supplyReturn);
   }
-  for (const part of circuit.parts) {
-    const tags = tagsOf(part);
-    if (tags.length === 2) offer(tags[0]!, tags[1]!);
-  }
+  for (const part of circuit.parts) offer(...endsOf(part));
   return [...found.values()];
+}
+
+/** Where a part is measured by itself: its two ends, or what it gives out. */
+function endsOf(part: Part): readonly [string, string] {
+  if (part.kind === 'transformer') return part.secondary;
+  return part.kind === 'bridge' ? [part.between[2], part.between[3]] : part.between;
 }
 
 const endsKey = (a: string, b: string): string => (a < b ? `${a}|${b}` : `${b}|${a}`);
@@ -77,9 +78,7 @@ const endsKey = (a: string, b: string): string => (a < b ? `${a}|${b}` : `${b}|$
 function partsByEnds(circuit: Circuit): ReadonlyMap<string, readonly string[]> {
   const parts = new Map<string, string[]>();
   for (const part of circuit.parts) {
-    const tags = tagsOf(part);
-    if (tags.length !== 2) continue;
-    const key = endsKey(tags[0]!, tags[1]!);
+    const key = endsKey(...endsOf(part));
     parts.set(key, [...(parts.get(key) ?? []), part.name]);
   }
   return parts;

@@ -2,6 +2,7 @@ import type { Circuit } from '../circuit';
 import type { AdviceRequest, Danger } from './advice';
 import { setUpKey, type Belief } from './belief';
 import type { Evidence } from './evidence';
+import { answerable } from './answerable';
 import { candidatesOf, type Candidate } from './candidates';
 import { dangersOf } from './danger';
 import type { Hypothesis } from './hypotheses';
@@ -43,11 +44,7 @@ export class Consultation {
     private readonly evidence: Evidence,
     readonly request: AdviceRequest,
   ) {
-    const tags = new Set(circuit.terminals.map(({ tag }) => tag));
-    // A tag that the circuit does not have says nothing that the circuit could answer.
-    const known = request.observations.filter(
-      (seen) => seen.kind !== 'reading' || (tags.has(seen.red) && tags.has(seen.black)),
-    );
+    const known = answerable(circuit, request.observations);
     this.readings = known.filter((seen) => seen.kind === 'reading');
     this.known = known;
     this.belief = this.believe(known);
@@ -87,6 +84,11 @@ export class Consultation {
 
   row(pair: Pick<Candidate, 'red' | 'black' | 'function' | 'state'>): readonly Prediction[] {
     return this.predictions.readings(pair.state, { ...pair, ohms: this.request.meter.ohms });
+  }
+
+  /** What every hypothesis would have shown to the meter that took this reading. */
+  rowOf(reading: ReadingObservation): readonly Prediction[] {
+    return this.predictions.readings(reading.state, { ...reading, ohms: reading.meter.ohms });
   }
 
   /** Neighbouring predictions that the meter does not tell apart share a group; lowest volts first. */

@@ -1,8 +1,9 @@
 import type { Circuit } from '../circuit';
-import { normalised, setUpKey, SUPPLY_DEVIATION, SUPPLY_FACTORS, type Belief } from './belief';
+import { normalised, SUPPLY_DEVIATION, SUPPLY_FACTORS, type Belief } from './belief';
 import { NOT_DESCRIBED_PRIOR, type Hypothesis } from './hypotheses';
-import { anywhere, readingLikelihood, relayLikelihood } from './likelihood';
-import type { Observation, ReadingObservation } from './observation';
+import { anywhere, readingLikelihood, relayLikelihood, slipAfter } from './likelihood';
+import type { Observation } from './observation';
+import { pieces, type ReadingPiece, type RelayPiece } from './pieces';
 import type { Predictions } from './predictions';
 
 /** What one observation says: log-likelihoods by hypothesis and supply factor, and of *not described*. */
@@ -16,14 +17,14 @@ const RELAY_ANYHOW = 0.5;
 /** Observations whose weights are kept; a long case has some hundreds. */
 const MOST_KEPT = 2000;
 
-/** Weighs observations, each once, and keeps the weights: leaving one out is a sum without it. */
+/** Weighs what was seen, each piece once, and keeps the weights: leaving one out is a sum without it. */
 export class Evidence {
   private readonly weights = new Map<string, Weight>();
   private readonly prior: Float64Array;
   private readonly scale: number;
 
   constructor(
-    circuit: Circuit,
+    private readonly circuit: Circuit,
     private readonly hypotheses: readonly Hypothesis[],
     private readonly predictions: Predictions,
   ) {
@@ -38,51 +39,49 @@ export class Evidence {
   }
 
   /**
-   * What to believe after the observations, with the supply's volts unknown and learnt: every hypothesis
-   * is weighed at every supply factor, and the factors are summed out. Slips are half persistent: a
-   * repeat of a set-up is counted once, by its latest value, so that agreement with oneself proves
-   * nothing.
+   * What to believe after the observations, in whatever order, with the supply's volts unknown and learnt:
+   * every hypothesis is weighed at every supply factor, and the factors are summed out. A set-up that
+   * agrees with itself is weighed once, so that a repeat adds almost nothing; one that contradicts itself
+   * is weighed at each of its values.
    */
   belief(observations: readonly Observation[]): Belief {
     const logs = this.prior.slice();
     let other = Math.log(NOT_DESCRIBED_PRIOR);
-    for (const seen of latest(observations)) {
-      const weight = this.weigh(seen);
-      if (!weight) continue;
+    for (const piece of pieces(this.circuit, observations)) {
+      const weight = this.weigh(piece);
       for (let k = 0; k < logs.length; k++) logs[k]! += weight.logs[k]!;
       other += weight.other;
     }
     return normalised(logs, other, this.hypotheses.length);
   }
 
-  private weigh(seen: Observation): Weight | undefined {
-    if (seen.kind === 'device') return undefined;
-    const key = JSON.stringify({ ...seen, id: '' });
+  private weigh(piece: ReadingPiece | RelayPiece): Weight {
+    const key = JSON.stringify(piece);
     let weight = this.weights.get(key);
     if (!weight) {
-      weight = seen.kind === 'reading' ? this.ofReading(seen) : this.ofRelay(seen);
+      weight = piece.kind === 'reading' ? this.ofReading(piece) : this.ofRelay(piece);
       if (this.weights.size >= MOST_KEPT) this.weights.clear();
       this.weights.set(key, weight);
     }
     return weight;
   }
 
-  private ofReading(seen: ReadingObservation): Weight {
+  private ofReading({ volts, times, meter, ...piece }: ReadingPiece): Weight {
     const width = SUPPLY_FACTORS.length;
     const logs = new Float64Array(this.prior.length);
-    const row = this.predictions.readings(seen.state, { ...seen, ohms: seen.meter.ohms });
+    const row = this.predictions.readings(piece.state, { ...piece, ohms: meter.ohms });
     row.forEach((predicted, h) => {
       SUPPLY_FACTORS.forEach((factor, s) => {
         const scaled = { ...predicted, volts: predicted.volts * factor };
         logs[h * width + s] = Math.log(
-          readingLikelihood(seen.volts, scaled, seen.meter, this.scale),
+          readingLikelihood(volts, scaled, meter, this.scale, slipAfter(times)),
         );
       });
     });
     return { logs, other: Math.log(anywhere(this.scale)) };
   }
 
-  private ofRelay(seen: Extract<Observation, { kind: 'relay' }>): Weight {
+  private ofRelay(seen: RelayPiece): Weight {
     const width = SUPPLY_FACTORS.length;
     const logs = new Float64Array(this.prior.length);
     this.predictions.relay(seen.state, seen.relay).forEach((position, h) => {
@@ -90,14 +89,4 @@ export class Evidence {
     });
     return { logs, other: Math.log(RELAY_ANYHOW) };
   }
-}
-
-function latest(observations: readonly Observation[]): readonly Observation[] {
-  const kept = new Map<string, Observation>();
-  for (const seen of observations) {
-    const state = JSON.stringify(seen.state);
-    if (seen.kind === 'reading') kept.set(`${setUpKey(seen)} ${state}`, seen);
-    else if (seen.kind === 'relay') kept.set(`relay ${seen.relay} ${state}`, seen);
-  }
-  return [...kept.values()];
 }

@@ -1,6 +1,6 @@
 import type { Advice, Reason, Suspect } from './advice';
 import type { Consultation } from './consultation';
-import { deviationOf } from './likelihood';
+import { deviationsOff } from './likelihood';
 import type { ReadingObservation } from './observation';
 import { reason } from './reasons';
 
@@ -36,10 +36,9 @@ export function becauseOf(about: Consultation, members: readonly number[]): Reas
 }
 
 function misfits(about: Consultation, reading: ReadingObservation, h: number) {
-  const row = about.row(reading);
+  const row = about.rowOf(reading);
   const scale = about.belief.supply.mean;
-  const off = (volts: number) =>
-    Math.abs(reading.volts - volts * scale) / deviationOf(volts, reading.meter);
+  const off = (volts: number) => deviationsOff(reading.volts, volts * scale, reading.meter);
   return {
     ofFault: row[h]!.floating ? 0 : off(row[h]!.volts),
     ofHealthy: off(row[0]!.volts),

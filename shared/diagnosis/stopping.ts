@@ -1,7 +1,7 @@
-import { tagsOf } from '../circuit';
 import type { Stopping } from './advice';
 import { setUpKey } from './belief';
 import type { Consultation } from './consultation';
+import { directReading } from './directProof';
 import type { ReadingObservation } from './observation';
 
 /** Condition (b) of the stopping rule. */
@@ -10,20 +10,6 @@ export const BELIEVED = 0.95;
 export const WITHOUT_ONE_PAIR = 0.9;
 /** Condition (d): the most that may be believed of *not described*. */
 export const MOST_NOT_DESCRIBED = 0.02;
-
-/** The reading that measured a part of the class directly: both probes on its own terminals. */
-export function directReading(
-  about: Consultation,
-  members: readonly number[],
-): ReadingObservation | undefined {
-  const parts = new Set(about.partsOf(members));
-  return about.readings.find(({ red, black }) =>
-    about.circuit.parts.some((part) => {
-      const tags = tagsOf(part);
-      return parts.has(part.name) && tags.includes(red) && tags.includes(black) && red !== black;
-    }),
-  );
-}
 
 /** The set-ups without which the class would no longer be believed. */
 export function pillarsOf(

@@ -1,6 +1,6 @@
 import type { LiftState, RelayPosition } from '../circuit';
 import type { Suggestion } from './advice';
-import { candidatesOf, functionOf, type Candidate } from './candidates';
+import { candidatesOf, type Candidate } from './candidates';
 import { cautionsOf } from './cautions';
 import type { Consultation, Group } from './consultation';
 import { forbidden } from './forbidden';
@@ -114,10 +114,9 @@ export class Suggesting {
   }
 
   private fresh(candidates: readonly Candidate[]): readonly Candidate[] {
-    const range = functionOf(this.about.circuit);
     const key = (state: LiftState) => JSON.stringify(state);
     return candidates.filter(
-      ({ red, black, state }) =>
+      ({ red, black, function: range, state }) =>
         !this.about.readings.some(
           (r) =>
             ((r.red === red && r.black === black) || (r.red === black && r.black === red)) &&
@@ -215,7 +214,7 @@ export class Suggesting {
       red,
       black,
       function: candidate.function,
-      rangeVolts: RANGES.find((range) => range >= circuit.nominalVolts * HEADROOM) ?? RANGES.at(-1),
+      rangeVolts: this.rangeOf(candidate),
       state: { ...state },
       minutes,
       outcomes,
@@ -235,6 +234,13 @@ export class Suggesting {
     const broken = forbidden(circuit, request, suggestion);
     if (broken) throw new Error(`forbidden: ${broken}`);
     return suggestion;
+  }
+
+  /** The smallest range that takes what any hypothesis would show here, and the supply. */
+  private rangeOf(candidate: Candidate): number {
+    const shown = this.about.row(candidate).map(({ volts }) => Math.abs(volts));
+    const most = shown.reduce((a, b) => Math.max(a, b), this.about.circuit.nominalVolts);
+    return RANGES.find((range) => range >= most * HEADROOM) ?? RANGES.at(-1)!;
   }
 
   /** The two largest shares in 100, where the reading divides what is left. */
