@@ -14,7 +14,7 @@ export interface CautionContext {
 /** What can happen at a reading, most dangerous first. */
 export function cautionsOf(
   circuit: Circuit,
-  { place, red, black }: Candidate,
+  { place, red, black }: Pick<Candidate, 'place' | 'red' | 'black'>,
   { changesState, returnDoubtful }: CautionContext,
 ): CautionCode[] {
   const codes: CautionCode[] = [];

@@ -35,3 +35,10 @@ export {
 } from './advice';
 export { ENGINE, createEngine, type Engine } from './advise';
 export { bestCuts, type CutPlan } from './cutTree';
+export {
+  describeReading,
+  type ReadingDescription,
+  type ReadingToDescribe,
+} from './describeReading';
+export { afterRepair, type PointAfterRepair } from './afterRepair';
+export { provingTests, type ProvingTest } from './provingTests';

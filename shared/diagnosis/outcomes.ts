@@ -1,9 +1,7 @@
 import type { Outcome } from './advice';
+import { bandOf } from './bands';
 import type { Consultation, Group } from './consultation';
 
-/** Of the string's volts: at least this is full, at most that is none (common practice). */
-const FULL = 0.85;
-const NONE = 0.05;
 /** Parts named for an outcome. */
 const MOST_LEFT = 6;
 /** An outcome less likely than this is not worth a line on the screen. */
@@ -31,11 +29,6 @@ export function outcomesOf(consultation: Consultation, groups: readonly Group[])
     .map(([band, inside]) => outcome(consultation, band, inside))
     .filter(({ probability }) => probability >= WORTH_A_LINE)
     .sort((a, b) => order[a.band] - order[b.band]);
-}
-
-function bandOf(volts: number, full: number): 'full' | 'between' | 'none' {
-  const share = Math.abs(volts) / full;
-  return share >= FULL ? 'full' : share <= NONE ? 'none' : 'between';
 }
 
 function outcome(
