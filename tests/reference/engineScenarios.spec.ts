@@ -1,33 +1,14 @@
-import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { CONTROLLER, type LiftState } from '@shared/circuit';
 import { createEngine, USUAL_METER, type Observation, type Step } from '@shared/diagnosis';
 import { solve } from '@shared/solver';
-import {
-  huntCircuit,
-  huntFault,
-  huntState,
-  type HuntCircuit,
-  type HuntFault,
-  type HuntSample,
-} from './huntCircuit';
+import { huntCircuit, huntFault, huntState } from './huntCircuit';
+import { circuits, scenarios, type Scenario } from './referenceData';
 
 /*
  * Scenarios of the trade through the whole engine. Readings: ngspice 39's of `data/reference.json` where
  * the pair was sampled there; of other pairs the solver's, which agrees with it (scenarios.spec.ts).
  */
-interface Scenario {
-  readonly name: string;
-  readonly circuit: string;
-  readonly faults: readonly HuntFault[];
-  readonly state: string;
-  readonly samples: readonly HuntSample[];
-}
-const file = new URL('./data/reference.json', import.meta.url);
-const { circuits, scenarios } = JSON.parse(readFileSync(file, 'utf8')) as {
-  circuits: readonly HuntCircuit[];
-  scenarios: readonly Scenario[];
-};
 const MOST_STEPS = 40;
 const WAY = 5;
 
