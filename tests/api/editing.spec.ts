@@ -40,6 +40,17 @@ describe('changing a lift', () => {
     await administrator.patch(path(), { notes: 'z' }, { ifMatch: version, key }).expect(422);
   });
 
+  it('refuses a character that can be kept nowhere, and never fails on one', async () => {
+    const note = { notes: 'a\u0000b' };
+    await server
+      .as('engineer')
+      .patch(path(), note, { ifMatch: 1 })
+      .expect((answer) => {
+        expect([400, 412]).toContain(answer.status);
+      });
+    await server.as('technician').get('/api/lifts?label=%00').expect(400);
+  });
+
   it('says what is wrong beside the field', async () => {
     const wrong = { hazards: [''], notes: 7 };
     const answer = await server.as('engineer').patch(path(), wrong, { ifMatch: 1 }).expect(400);

@@ -164,6 +164,32 @@ describe('sending events', () => {
     ]);
   });
 
+  it.each([
+    ['a NUL', { payload: { text: 'a\u0000b' } }],
+    ['half a pair', { payload: { text: 'a\ud800b' } }],
+    ['a NUL in a name', { state: { 'a\u0000b': 'c' } }],
+    ['the year 0', { recordedAt: '0000-01-01T00:00:00.000Z' }],
+  ])('sets aside an entry with %s, and takes what comes after', async (_, poison) => {
+    const own = phone();
+    const opened = own.open(field);
+    const bad = { ...own.note(opened.caseId), ...poison };
+    const after = own.note(opened.caseId);
+    const [first, second, third] = await own.send([opened, bad, after]);
+    expect([first!.outcome, third!.outcome]).toEqual(['accepted', 'accepted']);
+    expect(second!.outcome === 'accepted' || second!.code === 'cannot-be-stored').toBe(true);
+    expect((await own.send([bad]))[0]!.outcome).not.toBe('retry');
+  });
+
+  it('sets aside an opening that no date can hold, and answers the rest by name', async () => {
+    const own = phone();
+    const opened = { ...own.open(field), recordedAt: '0000-01-01T00:00:00.000Z' };
+    const note = own.note(opened.caseId);
+    expect(outcomesOf(await own.send([opened, note]))).toEqual([
+      'rejected cannot-be-stored',
+      'rejected case-unknown',
+    ]);
+  });
+
   it("refuses another person's device, another organisation's lift, and a review by a technician", async () => {
     const own = phone();
     const opened = own.open(field);

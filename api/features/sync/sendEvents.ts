@@ -1,8 +1,9 @@
 import type { EventResult, Role } from '@shared/contract';
 import type { InOrganisation } from '../../platform/db/doors';
-import { readBatch, runsOf } from './readBatch';
-import { storeRun } from './storeRun';
-import { isPassing } from './passingFailure';
+import { isPassing, isUnstorable } from './passingFailure';
+import { readBatch, runsOf, type BatchEntry } from './readBatch';
+import { setAsideUnstorable } from './setAsideUnstorable';
+import { storeRun, type RunContext } from './storeRun';
 
 export interface Sending {
   readonly role: Role;
@@ -24,11 +25,10 @@ export async function sendEvents(sending: Sending): Promise<{ results: EventResu
   const { role, device, now, ids, inside } = sending;
   const results: EventResult[] = [];
   let stopped = false;
+  const context = { role, device, now, ids };
   for (const run of runsOf(readBatch(device, sending.events))) {
     if (!stopped) {
-      const stored = await tryRun(() =>
-        inside((org) => storeRun(org, run, { role, device, now, ids })),
-      );
+      const stored = await storeSafely(run, context, inside);
       if (stored) {
         results.push(...stored);
         continue;
@@ -41,6 +41,33 @@ export async function sendEvents(sending: Sending): Promise<{ results: EventResu
     }
   }
   return { results };
+}
+
+/**
+ * Stores a run; where the database can't hold one of its values, entry by entry, and the one that can't be
+ * held is set aside: else it would come again with every batch and hold up everything behind it.
+ */
+async function storeSafely(
+  run: readonly BatchEntry[],
+  context: RunContext,
+  inside: Sending['inside'],
+): Promise<EventResult[] | undefined> {
+  try {
+    return await tryRun(() => inside((org) => storeRun(org, run, context)));
+  } catch (error) {
+    if (!isUnstorable(error)) throw error;
+    const [only, ...others] = run;
+    if (only && others.length === 0) {
+      return inside(async (org) => [await setAsideUnstorable(org, only, context)]);
+    }
+    const results: EventResult[] = [];
+    for (const entry of run) {
+      const stored = await storeSafely([entry], context, inside);
+      if (!stored) return undefined;
+      results.push(...stored);
+    }
+    return results;
+  }
 }
 
 async function tryRun<T>(store: () => Promise<T>): Promise<T | undefined> {

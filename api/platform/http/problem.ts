@@ -90,6 +90,10 @@ function refusalOf(thrown: unknown): Refusal | undefined {
   ) {
     return new Refusal('unavailable', { retryAfter: WAIT_WHEN_UNAVAILABLE });
   }
+  // A value that no column can hold, as a NUL in a text: what was sent can't be right.
+  if (typeof causeCode === 'string' && /^22[0-9A-Z]{3}$/.test(causeCode)) {
+    return new Refusal('invalid_request');
+  }
   // Express' own errors (a path that can't be decoded, a range that can't be satisfied).
   if (typeof status === 'number' && status >= 400 && status < 500) {
     return new Refusal(status === 404 ? 'not_found' : 'invalid_request');

@@ -23,6 +23,8 @@ export const httpSentences = {
   'sync.sequence-reuse':
     'Another entry of this phone has this number already. This one is set aside with its data.',
   'sync.envelope-invalid': 'This entry cannot be read. It is set aside with its data.',
+  'sync.cannot-be-stored':
+    'This entry holds a character or a date that cannot be kept. It is set aside with its data.',
   'sync.event-too-large': 'This entry is too large. It is set aside with its data.',
   'sync.sequence-behind':
     'A later entry of this phone was here first. This one is set aside with its data.',
