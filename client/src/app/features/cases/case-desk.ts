@@ -1,4 +1,5 @@
 import { Injectable, computed, effect, inject, signal, untracked } from '@angular/core';
+import { MatSnackBar } from '@angular/material/snack-bar';
 import {
   observationsForEngine,
   type CaseRefusal,
@@ -18,6 +19,7 @@ import { faultsLeft, operated, operatedPoints } from './practice';
 export class CaseDesk {
   private readonly store = inject(DeviceStore);
   private readonly engine = inject(EnginePort);
+  private readonly snackBar = inject(MatSnackBar);
 
   readonly caseId = signal('');
   private readonly journal = computed(() => this.store.journal(this.caseId()));
@@ -121,6 +123,18 @@ export class CaseDesk {
     return false;
   }
 
+  /** The same, and says so where nothing else on the screen shows it. At the top: the pad stays free. */
+  async addAndSay<T extends EventType>(type: T, payload: PayloadOf<T>): Promise<boolean> {
+    const kept = await this.add(type, payload);
+    if (kept) {
+      this.snackBar.open($localize`Kept here`, undefined, {
+        duration: SAID_FOR,
+        verticalPosition: 'top',
+      });
+    }
+    return kept;
+  }
+
   /** The event of the advice that is on the screen; kept when it is first shown. */
   async shown(): Promise<void> {
     const [advice, state] = [this.advice(), this.state()];
@@ -193,3 +207,6 @@ export class CaseDesk {
 }
 
 const refused = ({ code, details }: CaseRefusal): string => refusalSentence(code, details);
+
+/** How long *kept here* stands on the screen, milliseconds. */
+const SAID_FOR = 2_000;

@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { MatProgressBar } from '@angular/material/progress-bar';
 import { Router } from '@angular/router';
 import { CLIENT_BUILD } from '../../core/device/client-build';
 import { CLOCK } from '../../core/device/clock';
@@ -21,7 +22,7 @@ const MEGABYTE = 1_000_000;
 /** What this phone keeps, what it has not sent and why, and what it promises to keep. */
 @Component({
   selector: 'app-phone-page',
-  imports: [LocalTime, OwnEvents, PageHeader],
+  imports: [LocalTime, MatProgressBar, OwnEvents, PageHeader],
   templateUrl: './phone-page.html',
   styleUrl: './phone-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

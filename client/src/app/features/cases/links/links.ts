@@ -44,7 +44,7 @@ export class Links {
   protected async enter(): Promise<void> {
     this.tried.set(true);
     if (this.missing()) return;
-    const kept = await this.desk.add('link fitted', {
+    const kept = await this.desk.addAndSay('link fitted', {
       link: this.newId(),
       mark: this.mark().trim(),
       from: this.from().trim(),
@@ -58,13 +58,13 @@ export class Links {
   }
 
   protected async remove(link: string): Promise<void> {
-    await this.desk.add('link removed', { link });
+    await this.desk.addAndSay('link removed', { link });
   }
 
   protected async disturb(): Promise<void> {
     const what = this.thing().trim();
     if (!what) return;
-    const kept = await this.desk.add('thing disturbed', {
+    const kept = await this.desk.addAndSay('thing disturbed', {
       thing: this.newId(),
       kind: this.kind(),
       what,
@@ -73,7 +73,7 @@ export class Links {
   }
 
   protected async restore(thing: string): Promise<void> {
-    await this.desk.add('thing restored', { thing });
+    await this.desk.addAndSay('thing restored', { thing });
   }
 
   protected kindName(kind: (typeof disturbances)[number]): string {

@@ -26,6 +26,6 @@ export class More {
 
   protected async write(): Promise<void> {
     const text = this.note().trim();
-    if (text && (await this.desk.add('note written', { text }))) this.note.set('');
+    if (text && (await this.desk.addAndSay('note written', { text }))) this.note.set('');
   }
 }
