@@ -95,6 +95,8 @@ function createCluster(programs: string, folder: string, account: Account | unde
   const data = join(folder, 'data');
   // A folder without PG_VERSION is an initdb that was killed: nothing was ever stored in it.
   rmSync(data, { recursive: true, force: true });
+  // What was loaded into the old one is gone with it.
+  rmSync(join(folder, 'accounts.json'), { force: true });
   const secrets: Secrets = {
     owner: randomBytes(24).toString('base64url'),
     application: randomBytes(24).toString('base64url'),

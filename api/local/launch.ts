@@ -4,6 +4,7 @@ import { startApi, type ApiProcess } from './apiProcess';
 import { apiBundle, buildStale, clientFolder } from './build';
 import { startCluster, type Cluster } from './cluster';
 import { bring, postgresql } from './debianPackages';
+import { demoAccounts } from './demo';
 import { freePortFrom, isFree } from './freePort';
 import { runningLauncher, sayRunning, sayStopped } from './launcherLock';
 import { clusterFolder, ownFolder, postgresAccount } from './place';
@@ -60,8 +61,7 @@ async function serveLocal(): Promise<void> {
   const cluster = await startCluster(folder);
   started.push(cluster);
   await prepareDatabase(cluster.ownerUrl, cluster.applicationUrl);
-  const { loadDemo } = await import('../../seeds/load');
-  const accounts = await loadDemo(cluster.ownerUrl);
+  const accounts = await demoAccounts(folder, cluster.ownerUrl);
   const { stamp, rebuilt } = await building;
   if (rebuilt.length > 0) say(`Built: ${rebuilt.join(' and ')}.`);
 
