@@ -1,3 +1,4 @@
+import { setTimeout as pause } from 'node:timers/promises';
 import { buildStale } from '../api/local/build';
 import { removeCluster } from '../api/local/cluster';
 import { bring, chromium, ngspice, postgresql } from '../api/local/debianPackages';
@@ -16,6 +17,8 @@ const wanted = (suites: readonly Suite[]) =>
 
 /** Suites that run at a time: one for each of the two cores. */
 const LANES = 2;
+/** After an interrupt, milliseconds. */
+const WORKERS_END = 1_500;
 let interrupted = false;
 for (const signal of ['SIGINT', 'SIGTERM'] as const) {
   process.on(signal, () => {
@@ -68,6 +71,8 @@ const results = await inLanes(wanted(sideBySide), LANES);
 if (wanted(alone).length > 0 && !interrupted) {
   results.push(await build(), ...(await inLanes(wanted(alone), 1)));
 }
+// Workers that were interrupted take a moment to end; until then their clusters are not abandoned.
+if (interrupted) await pause(WORKERS_END);
 for (const folder of abandonedFolders()) await removeCluster(folder);
 
 const sum = (of: (result: Result) => number) => results.reduce((all, one) => all + of(one), 0);
