@@ -32,7 +32,19 @@ export default defineConfig({
             'tests/api/**/*.spec.ts',
             'tests/security/**/*.spec.ts',
           ],
+          exclude: ['tests/security/enumeration.spec.ts'],
           testTimeout: 30_000,
+          hookTimeout: 60_000,
+        },
+      },
+      {
+        extends: true,
+        test: {
+          // Watches the clock: runs while nothing else does.
+          name: 'timing',
+          globalSetup: './tests/api/cluster.ts',
+          include: ['tests/security/enumeration.spec.ts'],
+          testTimeout: 180_000,
           hookTimeout: 60_000,
         },
       },

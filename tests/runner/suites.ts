@@ -60,4 +60,4 @@ export const sideBySide: readonly Suite[] = [
 ];
 
 /** Alone: these watch a clock. */
-export const alone: readonly Suite[] = [vitest('browser')];
+export const alone: readonly Suite[] = [vitest('timing'), vitest('browser')];
